@@ -42,7 +42,8 @@ export function formatAge(timeMs: number, nowMs: number): string {
 
 function formatLength(minutes: number): string {
   if (minutes < 60) return `${minutes} min`;
-  if (minutes < 48 * 60) return minutes % 60 ? `${Math.floor(minutes / 60)} h ${minutes % 60} min` : `${minutes / 60} h`;
+  if (minutes < 48 * 60)
+    return minutes % 60 ? `${Math.floor(minutes / 60)} h ${minutes % 60} min` : `${minutes / 60} h`;
   const days = Math.floor(minutes / 1440);
   if (days >= 730) return `${Math.floor(days / 365.25)} years`;
   const hours = Math.floor((minutes % 1440) / 60);
