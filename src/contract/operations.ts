@@ -51,6 +51,7 @@ export const operations = {
       water: watchWater,
       window: timeWindow,
       nowMs: moment,
+      speedUnit: settings.shape.speedUnit,
       switches,
       hiddenPassIds: z.array(z.number().int()),
     }),
