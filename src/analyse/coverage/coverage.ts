@@ -105,14 +105,18 @@ function visitPointsOfCell(
   const area = aEast * bNorth - aNorth * bEast;
   if (area === 0) return;
 
-  const reachLat = (Math.abs(aNorth) + Math.abs(bNorth)) / RADIANS;
+  const reachEast = Math.abs(aEast) + Math.abs(bEast);
+  const reachNorth = Math.abs(aNorth) + Math.abs(bNorth);
+  // Near a pole a step east leads across parallels too.
+  const reachLat = (Math.abs(lat) > 85 ? Math.hypot(reachEast, reachNorth) : reachNorth) / RADIANS;
   const firstRow = Math.max(0, gridRowAt(grid, Math.max(-90, lat - reachLat)));
   const lastRow = Math.min(grid.rows - 1, gridRowAt(grid, Math.min(90, lat + reachLat)));
   if (firstRow > lastRow) return;
   const highestCos = Math.cos(Math.min(90, Math.abs(lat) + reachLat) * RADIANS);
-  const reachLon = (Math.abs(aEast) + Math.abs(bEast)) / RADIANS / Math.max(1e-9, highestCos);
+  const reachLon = reachEast / RADIANS / Math.max(1e-9, highestCos);
   const columnSpan = reachLon >= 180 ? grid.columns : Math.ceil((2 * reachLon * grid.columns) / grid.widthDeg) + 1;
   const firstColumn = reachLon >= 180 ? 0 : firstColumnFrom(grid, lon - reachLon);
+  if (firstColumn >= grid.columns || firstColumn + columnSpan < 0) return;
 
   const sinLon0 = Math.sin(lon * RADIANS);
   const cosLon0 = Math.cos(lon * RADIANS);
