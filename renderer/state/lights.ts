@@ -8,6 +8,8 @@ export interface Light {
   ink: string;
   soft: string;
   rule: string;
+  /** Outline of what can be pressed: at least 3 to 1 against the paper (WCAG 2.2, 1.4.11). */
+  edge: string;
   sea: string;
   unseen: string;
   hatch: string;
@@ -26,36 +28,39 @@ export const lights: Record<LightName, Light> = {
     ink: '#22303a',
     soft: '#5d6b73',
     rule: '#cfc8b8',
+    edge: '#857f6f',
     sea: '#eef3f3',
     unseen: '#cfd6d6',
-    hatch: '#6f7b80',
+    hatch: '#69757a',
     land: '#e3d9c2',
     coast: '#6d6350',
-    windInks: ['#8a9ca5', '#5b7480', '#1c636d', '#7a3a06', '#74102f', '#35084f'],
+    windInks: ['#768891', '#506a76', '#1c636d', '#7a3a06', '#74102f', '#35084f'],
   },
   dusk: {
     paper: '#2a3036',
     ink: '#e4dfd2',
     soft: '#b3b6b0',
     rule: '#444c52',
+    edge: '#818a90',
     sea: '#333c43',
     unseen: '#1c2024',
     hatch: '#66727b',
     land: '#4a463c',
-    coast: '#8b8370',
-    windInks: ['#74838b', '#94a9b3', '#7fd0d6', '#ffc684', '#ffd9d2', '#f7ecff'],
+    coast: '#a39a83',
+    windInks: ['#7f8c95', '#9bb0bb', '#7fd0d6', '#ffc684', '#ffd9d2', '#f7ecff'],
   },
   night: {
     paper: '#0c0806',
-    ink: '#c8773a',
-    soft: '#b87446',
+    ink: '#d4823f',
+    soft: '#b06c3d',
     rule: '#2f1d11',
+    edge: '#8a5832',
     sea: '#1a110b',
     unseen: '#040302',
-    hatch: '#6b4320',
+    hatch: '#7a4b24',
     land: '#21160d',
-    coast: '#5d3a1c',
-    windInks: ['#62391b', '#85501f', '#ad6c30', '#dc913f', '#ffa878', '#ffdcc4'],
+    coast: '#86552d',
+    windInks: ['#8b5629', '#a36a30', '#bd7b3b', '#dc913f', '#ffa878', '#ffdcc4'],
   },
 };
 
