@@ -1,8 +1,5 @@
 import { createHash, timingSafeEqual } from 'node:crypto';
-import { LARGEST_FILE_BYTES, routes } from '../../contract/routes.ts';
-
-/** The largest question, bytes: ten thousand long paths still fit. */
-const LARGEST_QUESTION_BYTES = 8 * 1024 * 1024;
+import { routes } from '../../contract/routes.ts';
 
 /** Where this host stands and the secret of this launch. */
 export interface OwnAddress {
@@ -20,10 +17,9 @@ export interface Knock {
   origin: string | undefined;
   fetchSite: string | undefined;
   token: string | undefined;
-  contentLength: string | undefined;
-  isChunked: boolean;
 }
 
+/** A request turned away: the HTTP status and a sentence for people. */
 export interface Refusal {
   status: number;
   message: string;
@@ -32,60 +28,30 @@ export interface Refusal {
 /**
  * Why a request is turned away before the door sees it, or undefined when it may pass. Holds off other sites in the
  * user's browser (Host against DNS rebinding, Origin and Sec-Fetch-Site against requests across sites) and other
- * programs on the machine (the token). Headers as in RFC 9110 and the W3C draft Fetch Metadata Request Headers.
+ * programs on the machine (the token). Statuses and headers: RFC 9110; W3C draft Fetch Metadata Request Headers.
  */
 export function findRefusal(knock: Knock, own: OwnAddress): Refusal | undefined {
-  if (knock.host !== new URL(own.origin).host)
-    return { status: 421, message: 'this is not the host that was asked for' };
-  if (knock.origin !== undefined && knock.origin !== own.origin) {
-    return { status: 403, message: `the page at ${knock.origin} may not ask here` };
+  const { method, target, host, origin, fetchSite, token } = knock;
+  if (host !== new URL(own.origin).host) return { status: 421, message: 'This is not the host that was asked for.' };
+  if (origin !== undefined && origin !== own.origin)
+    return { status: 403, message: 'Another origin may not ask here.' };
+  const url = target.startsWith('/') ? URL.parse(own.origin + target) : null;
+  if (url === null) return { status: 400, message: 'This is no path.' };
+  const isAnswered = answeredPlaces.has(url.pathname.split('/')[1]);
+  if (!isSiteAllowed(fetchSite, isAnswered)) return { status: 403, message: 'Another site may not ask here.' };
+  if (method !== 'GET' && method !== 'POST') return { status: 405, message: `${method} is not done here.` };
+  if (isAnswered && !isSameSecret(token, own.token)) {
+    return { status: 401, message: 'The token of this launch is missing or wrong.' };
   }
-  const url = URL.parse(own.origin + knock.target);
-  if (!knock.target.startsWith('/') || url?.origin !== own.origin) return { status: 400, message: 'this is no path' };
-  const isStatic = !isAnswered(url.pathname);
-  if (!isSiteAllowed(knock.fetchSite, isStatic)) return { status: 403, message: 'another site may not ask here' };
-  if (isStatic)
-    return isReading(knock.method) ? undefined : { status: 405, message: `${knock.method} is not done here` };
-  if (!isSameSecret(knock.token, own.token))
-    return { status: 401, message: 'the token of this launch is missing or wrong' };
-  return knock.method === 'POST' ? findSizeRefusal(knock, url.pathname) : refuseUnlessReading(knock.method);
+  return undefined;
 }
 
-/** Whether a path is one of the door's own routes; anything else is a static file. Spelling tricks count as the route. */
-function isAnswered(pathname: string): boolean {
-  const places = [routes.ask, routes.blocks, routes.news, routes.give].map((route) => route.split('/')[1]);
-  const first = pathname.replace(/^\/+/, '').split(/\/|%2f|%5c/i)[0];
-  return places.includes(unescapePath(first).toLowerCase());
-}
-
-function unescapePath(text: string): string {
-  try {
-    return decodeURIComponent(text);
-  } catch {
-    return text;
-  }
-}
+/** The first parts of the door's own routes; a path that begins otherwise is a static file. */
+const answeredPlaces = new Set(Object.values(routes).map((route) => route.split('/')[1]));
 
 /** 'none' is the user's own doing (an address typed, a bookmark): right for the page, never for a question. */
-function isSiteAllowed(fetchSite: string | undefined, isStatic: boolean): boolean {
-  return fetchSite === undefined || fetchSite === 'same-origin' || (isStatic && fetchSite === 'none');
-}
-
-function isReading(method: string): boolean {
-  return method === 'GET' || method === 'HEAD';
-}
-
-function refuseUnlessReading(method: string): Refusal | undefined {
-  return isReading(method) ? undefined : { status: 405, message: `${method} is not done here` };
-}
-
-function findSizeRefusal(knock: Knock, pathname: string): Refusal | undefined {
-  const mostBytes = pathname.startsWith(routes.give) ? LARGEST_FILE_BYTES : LARGEST_QUESTION_BYTES;
-  const bytes = Number(knock.contentLength);
-  if (knock.isChunked || !Number.isInteger(bytes))
-    return { status: 411, message: 'the length of the body is not stated' };
-  if (bytes > mostBytes) return { status: 413, message: `the body is larger than ${mostBytes / 2 ** 20} MiB` };
-  return undefined;
+function isSiteAllowed(fetchSite: string | undefined, isAnswered: boolean): boolean {
+  return fetchSite === undefined || fetchSite === 'same-origin' || (fetchSite === 'none' && !isAnswered);
 }
 
 /** Compares in constant time; digests first, so that not even the length shows. */
