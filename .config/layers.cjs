@@ -58,7 +58,7 @@ module.exports = {
       name: 'workers',
       at: ['src/workers'],
       runs: 'node',
-      layers: ['files', 'bytes', 'decode', 'swath', 'analyse', 'store'],
+      layers: ['files', 'bytes', 'decode', 'swath', 'analyse', 'store', 'contract'],
       packages: [],
     },
     {
