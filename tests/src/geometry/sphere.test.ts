@@ -1,3 +1,4 @@
+import geodesicLibrary from 'geographiclib-geodesic';
 import { expect, test } from 'vitest';
 import {
   bearingDeg,
@@ -34,3 +35,23 @@ test('goes the short way round in longitude', () => {
     20, -20, -180,
   ]);
 });
+
+test('stays within 0.6 percent of the WGS 84 geodesic on 2,000 random legs', () => {
+  // GeographicLib (Karney 2013, J. Geodesy 87, 43-55); the flattening of 1/298.257 allows 0.56 %.
+  const random = seededRandom(7);
+  for (let leg = 0; leg < 2000; leg++) {
+    const [lon1, lon2] = [random() * 360 - 180, random() * 360 - 180];
+    const [lat1, lat2] = [random() * 178 - 89, random() * 178 - 89];
+    const geodesic = geodesicLibrary.Geodesic.WGS84.Inverse(lat1, lon1, lat2, lon2).s12 as number;
+    expect((distanceKm(lon1, lat1, lon2, lat2) * 1000) / geodesic).toBeGreaterThan(0.994);
+    expect((distanceKm(lon1, lat1, lon2, lat2) * 1000) / geodesic).toBeLessThan(1.006);
+  }
+});
+
+function seededRandom(seed: number): () => number {
+  let state = seed;
+  return () => {
+    state = (state * 48271) % 2147483647;
+    return state / 2147483647;
+  };
+}
