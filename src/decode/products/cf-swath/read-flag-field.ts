@@ -1,0 +1,96 @@
+import { Problem } from '../../../problems/problem.ts';
+import type { FlagName } from '../../../wind/flags.ts';
+import { netcdfTypes } from '../../containers/netcdf-classic/netcdf-types.ts';
+import type { NetcdfVariable } from '../../containers/netcdf-classic/read-netcdf-header.ts';
+import { readVariableAsNumbers } from '../../containers/netcdf-classic/read-variable.ts';
+import { type CfFile, numberAttribute, textAttribute } from './cf-file.ts';
+import { type FlagFamily, reviewFlagWord } from './flag-words.ts';
+import { asUnsigned, missingIntervals } from './unpack-values.ts';
+
+/** A raw flag word that is missing. */
+export const MISSING_FLAGS = 0xffffffff;
+
+/** One entry of a flag variable's list: a cell has it when (its word AND mask) equals value, or is not 0 where value is null. */
+export interface FlagMeaning {
+  word: string;
+  mask: number;
+  value: number | null;
+  /** What it says of a cell; null for a word that was never reviewed. */
+  flag: FlagName | null;
+  family: FlagFamily | null;
+}
+
+/** A flag variable: the word of every cell, and what its bits mean; no meanings where the file's list is broken. */
+export interface FlagField {
+  name: string;
+  raw: Uint32Array;
+  meanings: FlagMeaning[] | null;
+}
+
+/** Reads a flag variable: CF conventions 3.5. A list whose parts do not match in number is a Problem told, not thrown. */
+export function readFlagField(file: CfFile, variable: NetcdfVariable): FlagField {
+  const meanings = readMeanings(variable);
+  if (!meanings) {
+    file.problems.push(
+      new Problem(
+        'flags-unknown',
+        `The flag words of ${variable.name} and their masks or values do not match in number, so its flags are unknown.`,
+        { file: file.header.fileName, part: `variable ${variable.name}` },
+      ),
+    );
+  }
+  return { name: variable.name, raw: readRawWords(file, variable), meanings };
+}
+
+/** Whether a cell's word has a meaning of the list. */
+export function hasMeaning(raw: number, { mask, value }: FlagMeaning): boolean {
+  const masked = (raw & mask) >>> 0;
+  return value === null ? masked !== 0 : masked === value;
+}
+
+function readMeanings(variable: NetcdfVariable): FlagMeaning[] | null {
+  const { attributes } = variable;
+  const words = textAttribute(attributes, 'flag_meanings')
+    .split(/\s+/)
+    .filter((word) => word !== '');
+  const bits = (numbers: number[]) => numbers.map((number) => asUnsigned(number, variable) >>> 0);
+  // One version of a writer spells the name of the masks with an e before it.
+  const masks = bits([...numberAttribute(attributes, 'flag_masks'), ...numberAttribute(attributes, 'eflag_masks')]);
+  const values = bits(numberAttribute(attributes, 'flag_values'));
+  const counts = [masks.length, values.length].filter((count) => count > 0);
+  if (words.length === 0 || counts.length === 0 || counts.some((count) => count !== words.length)) return null;
+  return words.map((word, index) => {
+    const review = reviewFlagWord(word);
+    return {
+      word,
+      mask: masks[index] ?? 0xffffffff,
+      value: values[index] ?? null,
+      flag: review?.flag ?? null,
+      family: review?.family ?? null,
+    };
+  });
+}
+
+/**
+ * The words as unsigned numbers, missing ones as MISSING_FLAGS. Missing is the stated fill, a word outside the stated
+ * range, or all bits of the type set (with or without the sign), which versions of one writer use unstated.
+ */
+function readRawWords(file: CfFile, variable: NetcdfVariable): Uint32Array {
+  const values = readVariableAsNumbers(file.bytes, file.header, variable);
+  const bitCount = 8 * Math.min(4, netcdfTypes[variable.type].byteLength);
+  const allSet = 2 ** bitCount - 1;
+  const allButSign = 2 ** (bitCount - 1) - 1;
+  const intervals = missingIntervals(variable, true);
+  const [, rangeHighest = Infinity] = numberAttribute(variable.attributes, 'valid_range');
+  const highest = numberAttribute(variable.attributes, 'valid_max')[0] ?? rangeHighest;
+  const most = highest < 0 ? asUnsigned(highest, variable) : highest;
+
+  const raw = new Uint32Array(values.length);
+  for (let i = 0; i < values.length; i++) {
+    const word = asUnsigned(values[i], variable);
+    let isMissing = !(word <= most) || word === allSet || word === allButSign;
+    for (const { lowest, highest } of intervals) if (word >= lowest && word <= highest) isMissing = true;
+    raw[i] = isMissing ? MISSING_FLAGS : word;
+  }
+  return raw;
+}
