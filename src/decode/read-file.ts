@@ -1,23 +1,27 @@
 import { Problem } from '../problems/problem.ts';
+import { readBufrSwaths } from './products/bufr-winds/read-bufr-swaths.ts';
+import { readCfSwaths } from './products/cf-swath/read-cf-swaths.ts';
 import type { ReadSwaths } from './read-swaths.ts';
 
-/** Reads the swaths of a file. Content, not name, says what it is; what no reader here knows is refused 'unknown-format'. */
+/**
+ * Reads the swaths of a file. Content, not name, says what it is. Throws 'unknown-format' for what no reader knows,
+ * 'unsupported-format' for a neighbour of what is read, and what the readers throw.
+ */
 export function readFileSwaths(bytes: Uint8Array, fileName: string): ReadSwaths {
   if (bytes.length === 0) throw new Problem('no-cells', 'This file is empty.', { file: fileName });
-  if (startsWith(bytes, 'CDF') && bytes[3] <= 5) return refuse('netCDF classic', fileName);
-  if (startsWith(bytes, '\x89HDF\r\n\x1a\n')) return refuse('HDF5 (netCDF-4)', fileName);
-  if (startsWith(bytes, '\x0e\x03\x13\x01')) return refuse('HDF4', fileName);
-  if (startsWith(bytes, '\x1f\x8b')) return refuse('gzip-compressed data: unpack it first', fileName);
-  if (findBufr(bytes) >= 0) return refuse('BUFR', fileName);
+  if (netcdfMagics.some((magic) => startsWith(bytes, magic))) return readCfSwaths(bytes, fileName);
+  if (isBufr(bytes)) return readBufrSwaths(bytes, fileName);
+  if (startsWith(bytes, '\x1f\x8b')) {
+    throw new Problem('unsupported-format', 'This file is packed with gzip: unpack it first.', { file: fileName });
+  }
   throw new Problem('unknown-format', `This file is in no format known here; it begins with ${showHead(bytes)}.`, {
     file: fileName,
     byte: 0,
   });
 }
 
-function refuse(format: string, fileName: string): never {
-  throw new Problem('unsupported-format', `This file is ${format}, which is not read here.`, { file: fileName });
-}
+/** Classic netCDF, netCDF-4 (HDF5) and HDF4: the netCDF reader reads the first and refuses the others by name. */
+const netcdfMagics = ['CDF', '\x89HDF', '\x0e\x03\x13\x01'];
 
 function startsWith(bytes: Uint8Array, magic: string, at = 0): boolean {
   for (let index = 0; index < magic.length; index++) {
@@ -29,11 +33,13 @@ function startsWith(bytes: Uint8Array, magic: string, at = 0): boolean {
 /** How far into a file its first message may begin: bulletin headings and padding come before it. */
 const LONGEST_HEADING_BYTES = 16 * 1024;
 
-/** Where the letters 'BUFR' first stand, near the beginning; -1 where they do not. */
-function findBufr(bytes: Uint8Array): number {
+/** Whether a message begins near the beginning; in mere text about BUFR a printed character stands in the edition's place. */
+function isBufr(bytes: Uint8Array): boolean {
   const end = Math.min(bytes.length, LONGEST_HEADING_BYTES);
-  for (let at = 0; at < end; at++) if (startsWith(bytes, 'BUFR', at)) return at;
-  return -1;
+  for (let at = 0; at < end; at++) {
+    if (startsWith(bytes, 'BUFR', at) && !(bytes[at + 7] >= 0x20)) return true;
+  }
+  return false;
 }
 
 /** The first bytes as text where they are printable, else in hexadecimal: "'Hello'" or 'ff 00 12'. */
