@@ -1,4 +1,4 @@
-import { Problem, toProblem } from '../../../problems/problem.ts';
+import { type Problem, toProblem } from '../../../problems/problem.ts';
 import { type BufrMessage, readHeader } from './read-header.ts';
 
 /** A message and what to call it: 'message 3', counted from 1 along the file, damaged ones too. */

@@ -1,4 +1,4 @@
-import type { BitReader } from '../../../bytes/bit-reader.ts';
+import { type BitReader, MOST_BITS } from '../../../bytes/bit-reader.ts';
 import { Problem } from '../../../problems/problem.ts';
 import { formatDescriptor } from './descriptor.ts';
 import { type ElementStep, isReplication, type PlanStep } from './plan.ts';
@@ -60,6 +60,7 @@ function layOutCompressed(reader: BitReader, plan: readonly PlanStep[], subsetCo
       columns.add({ element, position, widthBits: element.widthBits, strideBits: 0, base: 0 });
       return base;
     }
+    refuseTooWide(reader, element, isText ? 0 : widthBits);
     const column = { element, position: reader.position, widthBits, strideBits: widthBits, base };
     columns.add(column);
     if (isCounter) return readEqualCounts(reader, column, subsetCount);
@@ -67,6 +68,12 @@ function layOutCompressed(reader: BitReader, plan: readonly PlanStep[], subsetCo
     return 0;
   });
   return { firstSubset: 0, subsetCount, columns: columns.list };
+}
+
+function refuseTooWide({ byte }: BitReader, { descriptor }: ElementStep, widthBits: number): void {
+  if (widthBits <= MOST_BITS) return;
+  const name = formatDescriptor(descriptor);
+  throw new Problem('damaged', `Element ${name} has increments of ${widthBits} bits.`, { byte });
 }
 
 /** In compressed data every subset must repeat a delayed block equally often. */

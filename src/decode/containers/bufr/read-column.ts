@@ -1,6 +1,4 @@
-import { type BitReader, MOST_BITS } from '../../../bytes/bit-reader.ts';
-import { Problem } from '../../../problems/problem.ts';
-import { formatDescriptor } from './descriptor.ts';
+import type { BitReader } from '../../../bytes/bit-reader.ts';
 import type { Column } from './lay-out-data.ts';
 
 /** Where the numbers of a column go: value n to `values[first + n * step]`. */
@@ -12,7 +10,7 @@ export interface Target {
 
 /**
  * Reads the numbers of a column, one for each of `subsetCount` subsets; NaN where missing. `scratch` has room for one
- * block. Text is refused: see `readTexts`.
+ * block. Not for text: see `readTexts`.
  */
 export function readNumbers(
   reader: BitReader,
@@ -22,7 +20,6 @@ export function readNumbers(
   { values, first, step }: Target,
 ): void {
   const { element, widthBits, strideBits, base } = column;
-  refuseUnless(element.kind !== 'text' && widthBits <= MOST_BITS, column);
   reader.moveTo(column.position);
   const power = 10 ** Math.abs(element.scale);
   const [divisor, factor] = element.scale < 0 ? [1, power] : [power, 1];
@@ -44,7 +41,6 @@ export function readNumbers(
 
 /** Reads the texts of a column, without trailing blanks; null where missing. Characters are CCITT IA5. */
 export function readTexts(reader: BitReader, column: Column, subsetCount: number): (string | null)[] {
-  refuseUnless(column.element.kind === 'text', column);
   const texts: (string | null)[] = [];
   for (let i = 0; i < subsetCount; i++) {
     reader.moveTo(column.position + i * column.strideBits);
@@ -53,10 +49,4 @@ export function readTexts(reader: BitReader, column: Column, subsetCount: number
     texts.push(isMissing ? null : String.fromCharCode(...octets).replace(/[ \0]+$/, ''));
   }
   return texts;
-}
-
-function refuseUnless(isReadable: boolean, { element, widthBits }: Column): void {
-  if (isReadable) return;
-  const name = formatDescriptor(element.descriptor);
-  throw new Problem('damaged', `Element ${name} cannot be read from fields of ${widthBits} bits.`);
 }

@@ -65,7 +65,9 @@ function readSection1(bytes: Uint8Array, at: number, edition: number) {
   const pair = (number: number) => octet(number) * 256 + octet(number + 1);
   const masterTable = edition < 2 ? 0 : octet(4);
   if (masterTable !== 0) {
-    throw new Problem('unsupported-format', `Master table ${masterTable} is not the meteorological one.`, { byte: at + 3 });
+    throw new Problem('unsupported-format', `Master table ${masterTable} is not the meteorological one.`, {
+      byte: at + 3,
+    });
   }
   // Octet numbers: FM 94 section 1, as each edition has them. Edition 3 alone halves the pair into sub-centre and centre.
   if (edition === 4) {

@@ -1,0 +1,102 @@
+import { Problem } from '../../../problems/problem.ts';
+import { type Swath, type Viewing, WIND } from '../../../swath/swath.ts';
+import { openMessage } from '../../containers/bufr/open-message.ts';
+import { arrangePasses, isPlaced } from './arrange-passes.ts';
+import { type CellTable, createCellTable, fillCells } from './cell-table.ts';
+import { checkRanges } from './check-ranges.ts';
+import { chooseWinds } from './choose-winds.ts';
+import { findFlagTable } from './flag-tables.ts';
+import { readFlags } from './read-flags.ts';
+import { readLikelihoods } from './read-likelihoods.ts';
+import type { SurveyedMessage } from './survey-message.ts';
+import { takeCells } from './take-cells.ts';
+
+/**
+ * Reads messages of one kind into passes. Cells that are damaged or cannot be placed are counted in `problems`.
+ */
+export function readPasses(bytes: Uint8Array, messages: readonly SurveyedMessage[], problems: Problem[]): Swath[] {
+  const { viewing, flagDescriptor } = messages[0];
+  const table = readTable(bytes, messages);
+  const { cells } = table;
+  const outside = checkRanges(table);
+  if (outside.size > 0) problems.push(describeOutside(outside));
+  const notes: string[] = [];
+  if (cells.solutions && !readLikelihoods(cells.solutions, viewing === 'pencil-beam')) {
+    notes.push('The likelihoods of this file are no probabilities of the solutions, so none are given.');
+  }
+  const choices = chooseWinds(table);
+  if (choices.unselected > 0) {
+    notes.push(`${choices.unselected} cells have winds but none selected: the likeliest speed is given, no direction.`);
+  }
+  dropEmptyParts(cells);
+  if (!cells.solutions) notes.push('The file holds radar looks but no winds.');
+  if (viewing === 'pencil-beam' && cells.beams) notes.push('Azimuths and noise of the looks are not read.');
+  tellUnplaced(table, problems);
+  return arrangePasses(table).map((pass) => {
+    const swath = takeCells(cells, pass);
+    describePass(swath, viewing, table, pass.cellAt[pass.cellAt.findIndex((cell) => cell >= 0)]);
+    swath.notes = [...notes];
+    readFlags(swath, findFlagTable(flagDescriptor));
+    return swath;
+  });
+}
+
+function readTable(bytes: Uint8Array, messages: readonly SurveyedMessage[]): CellTable {
+  const sizes = messages.map(({ size }) => size);
+  const table = createCellTable({
+    cells: sizes.reduce((sum, { cells }) => sum + cells, 0),
+    looks: Math.max(...sizes.map(({ looks }) => looks)),
+    solutions: Math.max(...sizes.map(({ solutions }) => solutions)),
+  });
+  let firstCell = 0;
+  for (const { message, size } of messages) {
+    const { reader, blocks } = openMessage(bytes, message);
+    for (const block of blocks) fillCells(table, firstCell + block.firstSubset, reader, block);
+    firstCell += size.cells;
+  }
+  return table;
+}
+
+function describeOutside(outside: ReadonlyMap<string, number>): Problem {
+  const list = [...outside].map(([kind, count]) => `${kind} ${count} times`).join(', ');
+  return new Problem(
+    'values-out-of-range',
+    `Values outside their physical range were left out and their cells marked: ${list}.`,
+  );
+}
+
+/** Parts that hold no value at all are no parts of the swath. */
+function dropEmptyParts(cells: Swath): void {
+  const isEmpty = (values: Float32Array) => values.every(Number.isNaN);
+  if (cells.solutions && isEmpty(cells.solutions.speedMs)) cells.solutions = null;
+  if (cells.beams && isEmpty(cells.beams.backscatterDb)) cells.beams = null;
+  if (cells.background && isEmpty(cells.background.speedMs)) cells.background = null;
+  if (cells.iceProbability && isEmpty(cells.iceProbability)) cells.iceProbability = null;
+}
+
+/** Cells without a place cannot be drawn or searched; that they exist, and how strong their wind is, must not be lost. */
+function tellUnplaced(table: CellTable, problems: Problem[]): void {
+  let [unplaced, winds, strongestMs] = [0, 0, 0];
+  for (let cell = 0; cell < table.cellNumber.length; cell++) {
+    if (isPlaced(table, cell)) continue;
+    unplaced++;
+    if (table.cells.state[cell] !== WIND) continue;
+    winds++;
+    strongestMs = Math.max(strongestMs, table.cells.speedMs[cell]);
+  }
+  if (unplaced === 0) return;
+  const strongest = winds > 0 ? `; ${winds} of them have a wind, up to ${strongestMs.toFixed(1)} m/s` : '';
+  const message = `${unplaced} cells have no usable position, time or cell number and are left out${strongest}.`;
+  problems.push(new Problem('damaged', message));
+}
+
+function describePass(swath: Swath, viewing: Viewing, table: CellTable, firstCell: number): void {
+  const platformCode = table.platformCode[firstCell];
+  swath.viewing = viewing;
+  // The sequences of fan-beam winds are of C-band radars, those of pencil beams of Ku-band ones (FM 94 table D, 3 12).
+  swath.band = viewing === 'fan-beam' ? 'C' : 'Ku';
+  swath.platformCode = Number.isNaN(platformCode) ? null : platformCode;
+  swath.cellSizeM = table.cellSizeM[firstCell];
+  // FM 94 table B, class 11: wind directions are those from which the wind blows.
+  swath.isDirectionStated = true;
+}
