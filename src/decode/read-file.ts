@@ -1,4 +1,5 @@
 import { Problem } from '../problems/problem.ts';
+import { isHdf4, isHdf5 } from './containers/netcdf-classic/sniff-netcdf.ts';
 import { readBufrSwaths } from './products/bufr-winds/read-bufr-swaths.ts';
 import { readCfSwaths } from './products/cf-swath/read-cf-swaths.ts';
 import type { ReadSwaths } from './read-swaths.ts';
@@ -9,7 +10,7 @@ import type { ReadSwaths } from './read-swaths.ts';
  */
 export function readFileSwaths(bytes: Uint8Array, fileName: string): ReadSwaths {
   if (bytes.length === 0) throw new Problem('no-cells', 'This file is empty.', { file: fileName });
-  if (netcdfMagics.some((magic) => startsWith(bytes, magic))) return readCfSwaths(bytes, fileName);
+  if (startsWith(bytes, 'CDF') || isHdf5(bytes) || isHdf4(bytes)) return readCfSwaths(bytes, fileName);
   if (isBufr(bytes)) return readBufrSwaths(bytes, fileName);
   if (startsWith(bytes, '\x1f\x8b')) {
     throw new Problem('unsupported-format', 'This file is packed with gzip: unpack it first.', { file: fileName });
@@ -19,9 +20,6 @@ export function readFileSwaths(bytes: Uint8Array, fileName: string): ReadSwaths 
     byte: 0,
   });
 }
-
-/** Classic netCDF, netCDF-4 (HDF5) and HDF4: the netCDF reader reads the first and refuses the others by name. */
-const netcdfMagics = ['CDF', '\x89HDF', '\x0e\x03\x13\x01'];
 
 function startsWith(bytes: Uint8Array, magic: string, at = 0): boolean {
   for (let index = 0; index < magic.length; index++) {

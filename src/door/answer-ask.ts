@@ -1,7 +1,7 @@
 import { type Desk, isOperationName } from '../operations/desk.ts';
 import { Problem } from '../problems/problem.ts';
 import { readBody } from './read-body.ts';
-import { respondJson } from './responses.ts';
+import { respondJson, respondTooLong } from './responses.ts';
 
 /** The longest question, bytes: room for 10,000 paths of common length. */
 const LONGEST_QUESTION_BYTES = 4 * 1024 * 1024;
@@ -10,6 +10,7 @@ const LONGEST_QUESTION_BYTES = 4 * 1024 * 1024;
 export async function answerAsk(desk: Desk, name: string, request: Request): Promise<Response> {
   if (!isOperationName(name)) throw new Problem('not-found', `There is no operation called '${name.slice(0, 80)}'.`);
   const bytes = await readBody(request, LONGEST_QUESTION_BYTES);
+  if (bytes === null) return respondTooLong(LONGEST_QUESTION_BYTES);
   return respondJson({ answer: await desk.perform(name, parseQuestion(bytes)) });
 }
 

@@ -5,7 +5,7 @@ import { answerAsk } from './answer-ask.ts';
 import { streamNews } from './answer-news.ts';
 import { answerStatic } from './answer-static.ts';
 import { readBody } from './read-body.ts';
-import { respond, respondJson, respondProblem } from './responses.ts';
+import { respond, respondJson, respondProblem, respondTooLong } from './responses.ts';
 
 /** What a host mounts: the whole application as one function. Never rejects. */
 export type Answer = (request: Request) => Promise<Response>;
@@ -58,5 +58,6 @@ async function answerGive(desk: Desk, url: URL, request: Request): Promise<Respo
     throw new Problem('bad-input', 'A given file needs a name of 1 to 255 characters.', { part: 'name' });
   }
   const bytes = await readBody(request, LARGEST_FILE_BYTES);
+  if (bytes === null) return respondTooLong(LARGEST_FILE_BYTES);
   return respondJson({ answer: await desk.give(name, bytes) });
 }

@@ -1,14 +1,12 @@
-import { Problem } from '../problems/problem.ts';
-
-/** The whole body of a request. Throws 'refused' as soon as it proves longer than `mostBytes`, whatever its header said. */
-export async function readBody(request: Request, mostBytes: number): Promise<ArrayBuffer> {
+/** The whole body of a request; null as soon as it proves longer than `mostBytes`, whatever its header said. */
+export async function readBody(request: Request, mostBytes: number): Promise<ArrayBuffer | null> {
   const stated = Number(request.headers.get('content-length') ?? 0);
-  if (stated > mostBytes) throw tooLong(mostBytes);
+  if (stated > mostBytes) return null;
   const parts: Uint8Array[] = [];
   let length = 0;
   for await (const part of request.body ?? []) {
     length += part.byteLength;
-    if (length > mostBytes) throw tooLong(mostBytes);
+    if (length > mostBytes) return null;
     parts.push(part);
   }
   const whole = new Uint8Array(length);
@@ -18,8 +16,4 @@ export async function readBody(request: Request, mostBytes: number): Promise<Arr
     offset += part.byteLength;
   }
   return whole.buffer;
-}
-
-function tooLong(mostBytes: number): Problem {
-  return new Problem('refused', `This is longer than the ${mostBytes} bytes that are accepted here.`);
 }

@@ -1,4 +1,4 @@
-import { describePlace, type Problem, type ProblemCode } from '../problems/problem.ts';
+import { describePlace, Problem, type ProblemCode } from '../problems/problem.ts';
 import { safeHeaders } from './safe-headers.ts';
 
 /** An answer of any kind with the headers that all carry. */
@@ -19,6 +19,11 @@ export function respondJson(value: unknown, status = 200, headers: Record<string
 export function respondProblem(problem: Problem, status = statusOf(problem.code), headers = {}): Response {
   const { code, message, place } = problem;
   return respondJson({ problem: { code, message, where: describePlace(place) } }, status, headers);
+}
+
+/** A refusal of a body that is longer than a place accepts. */
+export function respondTooLong(mostBytes: number): Response {
+  return respondProblem(new Problem('refused', `No more than ${mostBytes} bytes are accepted here.`), 413);
 }
 
 function statusOf(code: ProblemCode): number {

@@ -1,6 +1,6 @@
 import type { ToldProblem } from '../contract/values.ts';
 import { describePlace, type Problem, toProblem } from '../problems/problem.ts';
-import { type SwathSummary, summariseSwath } from '../swath/summarise.ts';
+import { summariseSwath } from '../swath/summarise.ts';
 import { NEVER_LOOKED, type Swath, WIND } from '../swath/swath.ts';
 import { type FlagName, flagBit, flagNames } from '../wind/flags.ts';
 import { decodeFile } from '../workers/decode-file.ts';
@@ -66,6 +66,8 @@ function tell({ code, message, place }: Problem, file: string): ToldProblem {
 
 function inspectSwath(swath: Swath): InspectedPass {
   const summary = summariseSwath(swath);
+  const sums = sumWinds(swath);
+  const isDirectionKnown = summary.winds === 0 || sums.directions > 0;
   return {
     start: tellTime(summary.startMs),
     end: tellTime(summary.endMs),
@@ -73,16 +75,20 @@ function inspectSwath(swath: Swath): InspectedPass {
     columns: swath.columns,
     cells: summary.cells,
     winds: summary.winds,
-    ...sumWinds(swath, summary),
+    sumSpeedMs: round(sums.speed, 4),
+    sumEastwardMs: isDirectionKnown ? round(sums.eastward, 4) : null,
+    sumNorthwardMs: isDirectionKnown ? round(sums.northward, 4) : null,
     maxSpeedMs: roundOrNull(summary.maxSpeedMs, 4),
     maxLon: roundOrNull(summary.maxLon, 5),
     maxLat: roundOrNull(summary.maxLat, 5),
     maxTime: tellTime(summary.maxTimeMs),
+    windsAtLeast17p2Ms: sums.atLeast17p2,
     windsOfGale: summary.galeWinds,
     flagCounts: countFlags(swath),
     directionStated: swath.isDirectionStated,
     beams: swath.beams?.count ?? 0,
     solutionsMax: countSolutions(swath),
+    windsNotFirstSolution: sums.notFirst,
     notes: swath.notes,
   };
 }
@@ -90,32 +96,21 @@ function inspectSwath(swath: Swath): InspectedPass {
 /** Speeds are held in 32 bits, so 17.2 may be this much less than itself, m/s. */
 const SPEED_SLACK_MS = 1e-6;
 
-function sumWinds(swath: Swath, { winds }: SwathSummary) {
-  let speed = 0;
-  let eastward = 0;
-  let northward = 0;
-  let directions = 0;
-  let atLeast17p2 = 0;
-  let notFirst = 0;
+function sumWinds(swath: Swath) {
+  const sums = { speed: 0, eastward: 0, northward: 0, directions: 0, atLeast17p2: 0, notFirst: 0 };
   for (let cell = 0; cell < swath.state.length; cell++) {
     if (swath.state[cell] !== WIND) continue;
     const speedMs = swath.speedMs[cell];
-    speed += speedMs;
-    if (speedMs + SPEED_SLACK_MS >= 17.2) atLeast17p2++;
-    if (swath.chosenSolution[cell] > 1) notFirst++;
+    sums.speed += speedMs;
+    if (speedMs + SPEED_SLACK_MS >= 17.2) sums.atLeast17p2++;
+    if (swath.chosenSolution[cell] > 1) sums.notFirst++;
     if (Number.isNaN(swath.directionFrom[cell])) continue;
-    directions++;
-    eastward -= speedMs * Math.sin((swath.directionFrom[cell] * Math.PI) / 180);
-    northward -= speedMs * Math.cos((swath.directionFrom[cell] * Math.PI) / 180);
+    sums.directions++;
+    // Blowing from a direction is moving the other way.
+    sums.eastward -= speedMs * Math.sin((swath.directionFrom[cell] * Math.PI) / 180);
+    sums.northward -= speedMs * Math.cos((swath.directionFrom[cell] * Math.PI) / 180);
   }
-  const isDirectionKnown = winds === 0 || directions > 0;
-  return {
-    sumSpeedMs: round(speed, 4),
-    sumEastwardMs: isDirectionKnown ? round(eastward, 4) : null,
-    sumNorthwardMs: isDirectionKnown ? round(northward, 4) : null,
-    windsAtLeast17p2Ms: atLeast17p2,
-    windsNotFirstSolution: notFirst,
-  };
+  return sums;
 }
 
 function countFlags(swath: Swath): Partial<Record<FlagName, number>> {

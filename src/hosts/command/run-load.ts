@@ -1,7 +1,7 @@
 import type { NewsLine } from '../../contract/news.ts';
 import type { FileFate } from '../../contract/values.ts';
-import { type Desk, openDesk } from '../../operations/desk.ts';
-import { describeInstallation } from '../../operations/installation.ts';
+import type { Desk } from '../../operations/desk.ts';
+import { atDesk } from './at-desk.ts';
 import type { Words } from './run-command.ts';
 import type { Terminal } from './terminal.ts';
 
@@ -11,14 +11,9 @@ export async function runLoad({ given, archivePath }: Words, terminal: Terminal)
     terminal.stderr.write('Name the files or folders to load: crosstrack load FILE|FOLDER... [--archive PATH]\n');
     return 2;
   }
-  const desk = openDesk({ ...describeInstallation(), archivePath });
-  try {
-    const fates = await loadAll(desk, given, terminal);
-    const isWhole = fates.every(({ fate }) => fate === 'loaded' || fate === 'already there');
-    return isWhole && fates.length > 0 ? 0 : 1;
-  } finally {
-    await desk.close();
-  }
+  const fates = await atDesk(archivePath, (desk) => loadAll(desk, given, terminal));
+  const isWhole = fates.every(({ fate }) => fate === 'loaded' || fate === 'already there');
+  return isWhole && fates.length > 0 ? 0 : 1;
 }
 
 function loadAll(desk: Desk, paths: string[], terminal: Terminal): Promise<FileFate[]> {

@@ -1,8 +1,8 @@
 import type { PassSummary } from '../../contract/values.ts';
-import { openDesk } from '../../operations/desk.ts';
-import { describeInstallation } from '../../operations/installation.ts';
+import { toProblem } from '../../problems/problem.ts';
 import { toWholeKnots } from '../../wind/units.ts';
 import { formatClock, formatDate, formatPosition } from '../../wind/words.ts';
+import { atDesk } from './at-desk.ts';
 import type { Words } from './run-command.ts';
 import { describeCautions } from './run-inspect.ts';
 import type { Terminal } from './terminal.ts';
@@ -13,16 +13,11 @@ export async function runPasses({ given, isJson, archivePath }: Words, terminal:
     terminal.stderr.write("'passes' lists them all and takes no names.\n");
     return 2;
   }
-  const desk = openDesk({ ...describeInstallation(), archivePath });
-  try {
-    const { passes } = await desk.perform('listPasses', {});
-    if (isJson) terminal.stdout.write(`${JSON.stringify(passes, null, 2)}\n`);
-    else if (passes.length === 0) terminal.stdout.write('The archive holds no passes.\n');
-    else terminal.stdout.write(`${[...passes.map(describePass), '', describeCautions()].join('\n')}\n`);
-    return 0;
-  } finally {
-    await desk.close();
-  }
+  const { passes } = await atDesk(archivePath, (desk) => desk.perform('listPasses', {}));
+  if (isJson) terminal.stdout.write(`${JSON.stringify(passes, null, 2)}\n`);
+  else if (passes.length === 0) terminal.stdout.write('The archive holds no passes.\n');
+  else terminal.stdout.write(`${[...passes.map(describePass), '', describeCautions()].join('\n')}\n`);
+  return 0;
 }
 
 /** Removes passes by their numbers; what is not there is told and the rest removed all the same. */
@@ -31,25 +26,19 @@ export async function runRemove({ given, archivePath }: Words, terminal: Termina
     terminal.stderr.write("Name passes by the numbers that 'crosstrack passes' lists: crosstrack remove PASS...\n");
     return 2;
   }
-  const desk = openDesk({ ...describeInstallation(), archivePath });
-  let code = 0;
-  try {
+  return atDesk(archivePath, async (desk) => {
+    let code = 0;
     for (const word of given) {
-      const removed = desk.perform('removePass', { passId: Number(word) });
-      const outcome = await removed.then(
-        () => `Pass ${word} was removed.`,
-        (problem: Error) => problem,
-      );
-      if (typeof outcome === 'string') terminal.stdout.write(`${outcome}\n`);
-      else {
-        terminal.stderr.write(`${outcome.message}\n`);
+      try {
+        await desk.perform('removePass', { passId: Number(word) });
+        terminal.stdout.write(`Pass ${word} was removed.\n`);
+      } catch (thrown) {
+        terminal.stderr.write(`${toProblem(thrown).message}\n`);
         code = 1;
       }
     }
     return code;
-  } finally {
-    await desk.close();
-  }
+  });
 }
 
 function describePass(pass: PassSummary): string {
