@@ -1,18 +1,10 @@
-import { parseArgs } from 'node:util';
 import { toProblem } from '../../problems/problem.ts';
 import { helpText } from './help-text.ts';
 import { runInspect } from './run-inspect.ts';
 import { runLoad } from './run-load.ts';
 import { runPasses, runRemove } from './run-passes.ts';
 import type { Terminal } from './terminal.ts';
-
-/** What the user typed after the command's name. */
-export interface Words {
-  /** Files, folders or ids. */
-  given: string[];
-  isJson: boolean;
-  archivePath: string | undefined;
-}
+import { readWords, type Words } from './words.ts';
 
 type Run = (words: Words, terminal: Terminal) => number | Promise<number>;
 
@@ -35,7 +27,7 @@ export async function runCommand(words: readonly string[], terminal: Terminal): 
     terminal.stderr.write(helpText);
     return 2;
   }
-  const parsed = parseWords(rest);
+  const parsed = readWords(rest);
   if (typeof parsed === 'string') {
     terminal.stderr.write(`${parsed}\nSee: crosstrack help\n`);
     return 2;
@@ -46,19 +38,5 @@ export async function runCommand(words: readonly string[], terminal: Terminal): 
     const { code, message, place } = toProblem(thrown);
     terminal.stderr.write(`${message}${place.file ? ` (${place.file})` : ''} [${code}]\n`);
     return 1;
-  }
-}
-
-/** The words as options and the rest, or a sentence that says what is wrong with them. */
-function parseWords(args: string[]): Words | string {
-  try {
-    const { values, positionals } = parseArgs({
-      args,
-      allowPositionals: true,
-      options: { json: { type: 'boolean' }, archive: { type: 'string' } },
-    });
-    return { given: positionals, isJson: values.json ?? false, archivePath: values.archive };
-  } catch (thrown) {
-    return (thrown as Error).message.split('. ')[0];
   }
 }

@@ -1,10 +1,10 @@
 import { type InspectedFile, type InspectedPass, inspectFiles } from '../../operations/inspect-files.ts';
-import { standingCautions } from '../../wind/cautions.ts';
 import { type FlagName, flagWords } from '../../wind/flags.ts';
 import { toWholeKnots } from '../../wind/units.ts';
 import { formatPosition } from '../../wind/words.ts';
-import type { Words } from './run-command.ts';
+import { describeCautions } from './describe-cautions.ts';
 import type { Terminal } from './terminal.ts';
+import type { Words } from './words.ts';
 
 /** Says what files hold: as one JSON array, or in plain words with the cautions below. */
 export function runInspect({ given, isJson }: Words, terminal: Terminal): number {
@@ -46,9 +46,4 @@ function describeStrongest({ maxSpeedMs, maxLon, maxLat, maxTime }: InspectedPas
   if (maxSpeedMs === null || maxLon === null || maxLat === null) return 'No wind, so no strongest wind.';
   const place = formatPosition(maxLon, maxLat);
   return `Strongest wind ${toWholeKnots(maxSpeedMs)} kt (${maxSpeedMs.toFixed(2)} m/s) at ${place}, ${maxTime}`;
-}
-
-/** The standing cautions as a list, for the end of any output that speaks of winds. */
-export function describeCautions(): string {
-  return ['Before you rely on any of this:', ...standingCautions.map((caution) => `  - ${caution}`)].join('\n');
 }

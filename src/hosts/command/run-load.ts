@@ -2,8 +2,8 @@ import type { NewsLine } from '../../contract/news.ts';
 import type { FileFate } from '../../contract/values.ts';
 import type { Desk } from '../../operations/desk.ts';
 import { atDesk } from './at-desk.ts';
-import type { Words } from './run-command.ts';
 import type { Terminal } from './terminal.ts';
+import type { Words } from './words.ts';
 
 /** Stores files and folders, with progress on stderr and each file's fate on stdout. An interrupt stops it in order. */
 export async function runLoad({ given, archivePath }: Words, terminal: Terminal): Promise<number> {

@@ -3,9 +3,9 @@ import { toProblem } from '../../problems/problem.ts';
 import { toWholeKnots } from '../../wind/units.ts';
 import { formatClock, formatDate, formatPosition } from '../../wind/words.ts';
 import { atDesk } from './at-desk.ts';
-import type { Words } from './run-command.ts';
-import { describeCautions } from './run-inspect.ts';
+import { describeCautions } from './describe-cautions.ts';
 import type { Terminal } from './terminal.ts';
+import type { Words } from './words.ts';
 
 /** Lists the passes in the archive, newest first. */
 export async function runPasses({ given, isJson, archivePath }: Words, terminal: Terminal): Promise<number> {
