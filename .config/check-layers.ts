@@ -11,6 +11,7 @@ interface Layer {
   runs: 'anywhere' | 'node' | 'browser';
   layers: string[];
   packages: string[];
+  importsComputed?: boolean;
 }
 
 export interface LayerTable {
@@ -96,7 +97,8 @@ function checkShape(file: string, table: LayerTable): string[] {
 function checkImport(root: string, file: string, found: ImportFound, table: LayerTable): string | undefined {
   const layer = layerOf(file, table);
   if (layer === undefined) return undefined;
-  if (found.target === null) return 'imports something computed, which no rule can read';
+  if (found.target === null)
+    return layer.importsComputed ? undefined : 'imports something computed, which no rule can read';
   if (!isRelative(found)) return found.kind === 'url' ? undefined : checkPackage(layer, found.target);
   const target = resolveFrom(file, found.target);
   if (found.kind === 'url' && !isLayered(target)) return layer.runs === 'node' ? undefined : `reaches ${target}`;

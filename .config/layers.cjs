@@ -70,26 +70,41 @@ module.exports = {
     },
     { name: 'door', at: ['src/door'], runs: 'node', layers: ['contract', 'operations'], packages: [] },
 
-    { name: 'hosts/node24', at: ['src/hosts/node24.mjs'], runs: 'node', layers: [], packages: [] },
+    {
+      name: 'hosts/node24',
+      at: ['src/hosts/node24.mjs'],
+      runs: 'node',
+      layers: [],
+      packages: [],
+      // It runs a file that the entry beside it names.
+      importsComputed: true,
+    },
+    {
+      name: 'hosts/shared',
+      at: ['src/hosts/shared'],
+      runs: 'node',
+      layers: ['operations'],
+      packages: [],
+    },
     {
       name: 'hosts/electron',
       at: ['src/hosts/electron'],
       runs: 'node',
-      layers: ['contract', 'operations', 'door'],
+      layers: ['contract', 'operations', 'door', 'hosts/shared'],
       packages: ['electron'],
     },
     {
       name: 'hosts/loopback',
       at: ['src/hosts/loopback'],
       runs: 'node',
-      layers: ['contract', 'operations', 'door'],
+      layers: ['contract', 'operations', 'door', 'hosts/shared'],
       packages: [],
     },
     {
       name: 'hosts/command',
       at: ['src/hosts/command'],
       runs: 'node',
-      layers: ['contract', 'operations', 'door', 'hosts/node24'],
+      layers: ['contract', 'operations', 'door', 'hosts/shared', 'hosts/node24'],
       packages: [],
     },
     {
