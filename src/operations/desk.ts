@@ -21,8 +21,8 @@ export interface DeskOptions {
   demoFolder: string;
   /** The folder of the base map's land. */
   coastlineFolder: string;
-  /** The entry of the loading thread: src/workers/load-worker.ts, or its bundle. */
-  workerUrl: URL;
+  /** The entry of the loading thread where it is a bundle; without one the source's own. */
+  workerUrl?: URL | undefined;
   appVersion: string;
 }
 
@@ -42,12 +42,14 @@ export interface Desk {
   close(): Promise<void>;
 }
 
+const ownWorkerUrl = new URL('../workers/load-worker.ts', import.meta.url);
+
 /** Opens the archive and sets up all that works on it. Throws what openArchive throws. */
 export function openDesk(options: DeskOptions): Desk {
   const archivePath = placeOfArchive(options.archivePath);
   const archive = openArchive(archivePath);
   const news = openNewsBoard();
-  const loader = startLoader(options.workerUrl, archivePath, news.say);
+  const loader = startLoader(options.workerUrl ?? ownWorkerUrl, archivePath, news.say);
   const coastline = openCoastline(options.coastlineFolder);
   const readWatch = createWatchReader(archive, coastline);
   const parts = { archive, loader, news, options, coastline, readWatch };

@@ -9,7 +9,7 @@ export async function atDesk<Result>(
   archivePath: string | undefined,
   act: (desk: Desk) => Promise<Result>,
 ): Promise<Result> {
-  const desk = openOwnDesk({ projectFolder, archivePath, workerFile: 'src/workers/load-worker.ts' });
+  const desk = openOwnDesk({ projectFolder, archivePath });
   try {
     return await act(desk);
   } finally {
