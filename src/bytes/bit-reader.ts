@@ -6,6 +6,24 @@ const SPARE_BYTES = 8;
 /** The widest field a number holds exactly. */
 export const MOST_BITS = 53;
 
+/** Where numbers are packed, and how each is to be written. */
+export interface ScaledRun {
+  widthBits: number;
+  strideBits: number;
+  count: number;
+  add: number;
+  factor: number;
+  least: number;
+  most: number;
+  missing: number;
+}
+
+/** The widest field that bit operations hold. */
+const MOST_WORD_BITS = 32;
+
+/** The widest field that one 32-bit word holds wherever in a byte it begins. */
+export const MOST_SCALED_BITS = 25;
+
 /** Reads fields of any number of bits, most significant bit first, and never outside the bytes it was given. */
 export class BitReader {
   private readonly view: DataView;
@@ -51,7 +69,7 @@ export class BitReader {
   read(widthBits: number): number {
     const at = this.at;
     this.skip(widthBits);
-    if (widthBits <= 32) return fetchField(this.view, at, widthBits);
+    if (widthBits <= MOST_WORD_BITS) return fetchField(this.view, at, widthBits);
     const highBits = widthBits - 32;
     return fetchField(this.view, at, highBits) * 2 ** 32 + fetchField(this.view, at + highBits, 32);
   }
@@ -64,24 +82,42 @@ export class BitReader {
     return octets;
   }
 
-  /** Reads `count` numbers of 0 to 53 bits into the front of `into`, each beginning `strideBits` after the one before. */
+  /** Reads `count` numbers of 0 to 53 bits to the front of `into`, each beginning `strideBits` after the one before. */
   readRun(widthBits: number, strideBits: number, count: number, into: Float64Array): void {
-    if (count === 0) return;
-    const start = this.at;
-    this.skip((count - 1) * strideBits + widthBits);
-    const { view } = this;
-    let at = start;
-    if (widthBits > 0 && widthBits <= 25) {
-      const drop = 32 - widthBits;
-      for (let i = 0; i < count; i++, at += strideBits) {
-        into[i] = (view.getUint32(at >>> 3) << (at & 7)) >>> drop;
-      }
+    const { view, at } = this;
+    if (count > 0) this.skip((count - 1) * strideBits + widthBits);
+    if (widthBits <= MOST_WORD_BITS) {
+      for (let i = 0, bit = at; i < count; i++, bit += strideBits) into[i] = fetchField(view, bit, widthBits);
     } else {
-      for (let i = 0; i < count; i++, at += strideBits) {
-        this.at = at;
+      for (let i = 0; i < count; i++) {
+        this.at = at + i * strideBits;
         into[i] = this.read(widthBits);
       }
     }
+  }
+
+  /**
+   * Reads `count` numbers of 1 to 25 bits as `readRun` does and writes each as (number + add) * factor, from
+   * `into[first]` on, `step` apart. A number that is not from `least` to `most` becomes NaN. Tells whether any of those was
+   * another number than `missing`.
+   */
+  readScaledRun(run: ScaledRun, into: Float32Array, first: number, step: number): boolean {
+    const { widthBits, strideBits, count, add, factor, least, most, missing } = run;
+    const { view } = this;
+    const drop = 32 - widthBits;
+    let bit = this.at;
+    let isAnyOutside = false;
+    if (count > 0) this.skip((count - 1) * strideBits + widthBits);
+    for (let i = 0, place = first; i < count; i++, bit += strideBits, place += step) {
+      const field = (view.getInt32(bit >>> 3) << (bit & 7)) >>> drop;
+      if (field >= least && field <= most) {
+        into[place] = (field + add) * factor;
+      } else {
+        into[place] = Number.NaN;
+        if (field !== missing) isAnyOutside = true;
+      }
+    }
+    return isAnyOutside;
   }
 
   private refuse(bits: number): never {

@@ -3,7 +3,7 @@ import { toProblem } from '../../../problems/problem.ts';
 import type { FoundMessage } from './find-messages.ts';
 import { type Column, type DataBlock, layOutData } from './lay-out-data.ts';
 import { type ElementStep, planDescriptors } from './plan.ts';
-import { readNumbers, readTexts } from './read-column.ts';
+import { readExactNumbers, readTexts } from './read-column.ts';
 
 /** A message whose elements have been found and can be read in any order. */
 export interface OpenMessage {
@@ -41,6 +41,6 @@ export function* listSubsets({ reader, blocks }: OpenMessage): Generator<Element
 function readValues(reader: BitReader, column: Column, subsetCount: number): (number | string | null)[] {
   if (column.element.kind === 'text') return readTexts(reader, column, subsetCount);
   const values = new Float64Array(subsetCount);
-  readNumbers(reader, column, subsetCount, new Float64Array(subsetCount), { values, first: 0, step: 1 });
+  readExactNumbers(reader, column, subsetCount, values);
   return Array.from(values, (value) => (Number.isNaN(value) ? null : value));
 }

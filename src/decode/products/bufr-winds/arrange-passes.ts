@@ -56,7 +56,7 @@ export function isPlaced({ cells, cellNumber }: CellTable, cell: number): boolea
 /** The time a cell's row goes by: its own, or that of the first cell of a row the file numbers. */
 function timeRows({ cells, rowNumber }: CellTable): Float64Array {
   const { timeMs } = cells;
-  const rowTimeMs = Float64Array.from(timeMs);
+  const rowTimeMs = timeMs.slice();
   for (let i = 1; i < rowTimeMs.length; i++) {
     if (rowNumber[i] !== rowNumber[i - 1]) continue;
     if (Math.abs(timeMs[i] - rowTimeMs[i - 1]) <= LONGEST_ROW_MS) rowTimeMs[i] = rowTimeMs[i - 1];
@@ -85,7 +85,7 @@ function compareNumbers(a: number, b: number): number {
   return Number.isNaN(a) ? (Number.isNaN(b) ? 0 : 1) : Number.isNaN(b) ? -1 : a - b;
 }
 
-function planPass(order: Int32Array, rowTimeMs: Float64Array, cellNumber: Float64Array): PassPlan {
+function planPass(order: Int32Array, rowTimeMs: Float64Array, cellNumber: Float32Array): PassPlan {
   const rowOf = new Int32Array(order.length);
   let columns = 0;
   let rows = 0;

@@ -1,6 +1,6 @@
 import type { BitReader } from '../../../bytes/bit-reader.ts';
 import type { Column, DataBlock } from '../../containers/bufr/lay-out-data.ts';
-import { readNumbers } from '../../containers/bufr/read-column.ts';
+import { readExactNumbers } from '../../containers/bufr/read-column.ts';
 
 /** One radar look of a cell. */
 export interface LookColumns {
@@ -92,6 +92,6 @@ function findSolutions(all: FindAll, isEmpty: (column: Column) => boolean): Solu
 function isMissingThroughout(reader: BitReader, column: Column): boolean {
   if (column.strideBits !== 0) return false;
   const value = new Float64Array(1);
-  readNumbers(reader, column, 1, value, { values: value, first: 0, step: 1 });
+  readExactNumbers(reader, column, 1, value);
   return Number.isNaN(value[0]);
 }

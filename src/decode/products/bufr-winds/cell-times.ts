@@ -12,15 +12,18 @@ export function readTimes(
   count: number,
   into: Float64Array,
 ): void {
-  const parts = columns.map((column) => {
-    const values = new Float64Array(count).fill(Number.NaN);
-    if (column) readNumbers(reader, column, count, values, { values, first: 0, step: 1 });
+  const [year, month, day, hour, minute, second] = columns.map((column) => {
+    const values = new Float32Array(count).fill(Number.NaN);
+    if (column) readNumbers(reader, column, count, { values, first: 0, step: 1 });
     return values;
   });
-  const [year, month, day, hour, minute, second] = parts;
   for (let i = 0; i < count; i++) {
-    const isAsBefore = i > 0 && parts.every((values) => values[i] === values[i - 1]);
-    into[i] = isAsBefore ? into[i - 1] : toTimeMs(year[i], month[i], day[i], hour[i], minute[i], second[i]);
+    const j = i - 1;
+    // The cells of a row share their time, so most are as the one before.
+    const isSameMinute =
+      i > 0 && minute[i] === minute[j] && hour[i] === hour[j] && day[i] === day[j] && month[i] === month[j];
+    const isSameTime = isSameMinute && second[i] === second[j] && year[i] === year[j];
+    into[i] = isSameTime ? into[j] : toTimeMs(year[i], month[i], day[i], hour[i], minute[i], second[i]);
   }
 }
 

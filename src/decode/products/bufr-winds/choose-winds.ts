@@ -1,6 +1,5 @@
 import { LOOKED_NO_WIND, WIND } from '../../../swath/swath.ts';
 import { flagBit } from '../../../wind/flags.ts';
-import { normaliseDegrees } from '../../../wind/units.ts';
 import type { CellTable } from './cell-table.ts';
 
 /** Cells whose wind is not simply the one the file selects. */
@@ -21,27 +20,33 @@ export function chooseWinds(table: CellTable): ChoiceCounts {
   const { solutions } = cells;
   const counts: ChoiceCounts = { unselected: 0, withoutDirection: 0 };
   cells.state.fill(LOOKED_NO_WIND);
+  if (cells.background) turnNorthToZero(cells.background.directionFrom);
   if (!solutions) return counts;
   const { slots, speedMs, directionFrom } = solutions;
-  for (let i = 0; i < directionFrom.length; i++) directionFrom[i] = normaliseDegrees(directionFrom[i]);
+  turnNorthToZero(directionFrom);
   for (let cell = 0; cell < selected.length; cell++) {
     const first = cell * slots;
-    const isInFile = selected[cell] >= 1 && selected[cell] <= slots && speedMs[first + selected[cell] - 1] >= 0;
-    const number = isInFile ? selected[cell] : mostProbable(speedMs, solutions.probability, first, slots);
+    const isSelected = selected[cell] >= 1 && selected[cell] <= slots && speedMs[first + selected[cell] - 1] >= 0;
+    const number = isSelected ? selected[cell] : mostProbable(speedMs, solutions.probability, first, slots);
     if (number === 0) continue;
     const chosen = first + number - 1;
     cells.state[cell] = WIND;
     cells.speedMs[cell] = speedMs[chosen];
-    if (isInFile) {
+    if (isSelected) {
       cells.chosenSolution[cell] = number;
       cells.directionFrom[cell] = directionFrom[chosen];
     } else counts.unselected++;
     if (Number.isNaN(cells.directionFrom[cell])) {
       cells.flags[cell] |= flagBit.directionUnknown;
-      if (isInFile) counts.withoutDirection++;
+      if (isSelected) counts.withoutDirection++;
     }
   }
   return counts;
+}
+
+/** The file's 360 is our 0: directions are 0 <= d < 360. Others have been found to be within 0 to 360. */
+function turnNorthToZero(directionFrom: Float32Array): void {
+  for (let i = 0; i < directionFrom.length; i++) if (directionFrom[i] === 360) directionFrom[i] = 0;
 }
 
 /** The number of the most probable solution with a speed, counted from 1; 0 where there is none. */

@@ -17,9 +17,10 @@ export function readLikelihoods(solutions: Solutions, mustSumToOne: boolean): bo
   for (let first = 0; first < probability.length; first += slots) {
     let sum = 0;
     for (let n = 0; n < slots; n++) {
+      if (Number.isNaN(probability[first + n])) continue;
       const value = Math.exp(probability[first + n] * Math.LN10);
       probability[first + n] = value;
-      if (value >= 0) sum += value;
+      sum += value;
     }
     if (sum === 0) continue;
     cellsWithAny++;

@@ -3,7 +3,6 @@ import { type Swath, type Viewing, WIND } from '../../../swath/swath.ts';
 import { openMessage } from '../../containers/bufr/open-message.ts';
 import { arrangePasses, isPlaced } from './arrange-passes.ts';
 import { type CellTable, createCellTable, fillCells } from './cell-table.ts';
-import { checkRanges } from './check-ranges.ts';
 import { chooseWinds } from './choose-winds.ts';
 import { findFlagTable } from './flag-tables.ts';
 import { readFlags } from './read-flags.ts';
@@ -18,8 +17,7 @@ export function readPasses(bytes: Uint8Array, messages: readonly SurveyedMessage
   const { viewing, flagDescriptor } = messages[0];
   const table = readTable(bytes, messages);
   const { cells } = table;
-  const outside = checkRanges(table);
-  if (outside.size > 0) problems.push(describeOutside(outside));
+  if (table.outside.size > 0) problems.push(describeOutside(table.outside));
   const notes: string[] = [];
   if (cells.solutions && !readLikelihoods(cells.solutions, viewing === 'pencil-beam')) {
     notes.push('The likelihoods of this file are no probabilities of the solutions, so none are given.');
@@ -49,8 +47,8 @@ function readTable(bytes: Uint8Array, messages: readonly SurveyedMessage[]): Cel
     solutions: Math.max(...sizes.map(({ solutions }) => solutions)),
   });
   let firstCell = 0;
-  for (const { message, size } of messages) {
-    const { reader, blocks } = openMessage(bytes, message);
+  for (const { message, size, open } of messages) {
+    const { reader, blocks } = open ?? openMessage(bytes, message);
     for (const block of blocks) fillCells(table, firstCell + block.firstSubset, reader, block);
     firstCell += size.cells;
   }

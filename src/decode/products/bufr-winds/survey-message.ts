@@ -13,6 +13,8 @@ export interface SurveyedMessage {
   /** The element of its flag word; 0 where it has none. */
   flagDescriptor: number;
   size: TableSize;
+  /** Kept where it is small; a message of many differing blocks is opened again. */
+  open: OpenMessage | null;
 }
 
 /** More solutions or looks than any template gives a cell; a message with more is damaged. */
@@ -35,7 +37,7 @@ export function surveyMessage(bytes: Uint8Array, message: FoundMessage): Surveye
     flagDescriptor = columns.flagWord?.element.descriptor ?? flagDescriptor;
   }
   refuseImpossible(size, message);
-  return { message, viewing: tellViewing(open), flagDescriptor, size };
+  return { message, viewing: tellViewing(open), flagDescriptor, size, open: open.blocks.length === 1 ? open : null };
 }
 
 function refuseUnlessCells({ lat, lon, time, cellNumber, looks, solutions }: CellColumns, message: FoundMessage): void {
