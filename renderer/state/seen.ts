@@ -53,6 +53,8 @@ export interface Seen {
   /** Whether that answer still fits what the window shows. */
   watchReading: Reading<null>;
   loads: Load[];
+  /** What failed last, as a sentence, until it is dismissed. */
+  trouble: string | null;
   /** Whether the host is heard. */
   isLinked: boolean;
 }
@@ -89,6 +91,7 @@ export function createSeen(systemMs: number): SeenStore {
     watch: null,
     watchReading: { state: 'none' },
     loads: [],
+    trouble: null,
     isLinked: true,
   });
 }

@@ -1,0 +1,20 @@
+import type { PassSummary } from '../../../src/contract/values.ts';
+import { formatAge, formatClock, formatDate } from '../../../src/wind/words.ts';
+
+/** The words of what the chart must say about itself. */
+export const noticeWords = {
+  lost: 'Crosstrack is not heard: what is shown may be out of date. Trying again.',
+  readingWinds: 'Reading winds: blank water says nothing yet.',
+  windsFailed: (reason: string) => `The winds of this view could not be read: ${reason}.`,
+  tryAgain: 'Try again',
+  dismiss: 'Dismiss',
+  standAtNewest: 'Stand at the newest pass',
+  empty: 'Nothing is loaded. Open swath files, or drop them anywhere in this window.',
+  loadDemonstration: 'Load the demonstration (invented data)',
+} as const;
+
+/** That no pass lies in the window, and when the newest was: the offer to stand there. */
+export function describeOldPasses(newest: Pick<PassSummary, 'endMs'>, nowMs: number): string {
+  const moment = `${formatDate(newest.endMs)} ${formatClock(newest.endMs)} UTC`;
+  return `No pass lies in the time window. The newest ended ${moment}, ${formatAge(newest.endMs, nowMs)}.`;
+}

@@ -1,0 +1,34 @@
+import { make } from './make.ts';
+
+/** A figure: digits with what joins them and the letters of a hemisphere. */
+const figurePattern = /\d[\d.:°′]*(?:[NSEW]\b)?/g;
+
+/** Text with its figures set apart, so that they can be set in the face whose digits are all of one width. */
+export function splitFigures(text: string): { text: string; isFigure: boolean }[] {
+  const pieces: { text: string; isFigure: boolean }[] = [];
+  let end = 0;
+  for (const match of text.matchAll(figurePattern)) {
+    if (match.index > end) pieces.push({ text: text.slice(end, match.index), isFigure: false });
+    pieces.push({ text: match[0], isFigure: true });
+    end = match.index + match[0].length;
+  }
+  if (end < text.length) pieces.push({ text: text.slice(end), isFigure: false });
+  return pieces;
+}
+
+/** Nodes of a text whose figures stand in the mono face. */
+export function figures(text: string): Node[] {
+  return splitFigures(text).map((piece) =>
+    piece.isFigure ? make('span', { class: 'figure' }, piece.text) : document.createTextNode(piece.text),
+  );
+}
+
+/** Sets an element's text with its figures in the mono face, touching the page only when the text differs. */
+export function setFigures(element: Element, text: string): void {
+  if (element.textContent !== text) element.replaceChildren(...figures(text));
+}
+
+/** A count with its thousands set apart by a narrow space: '68 544'. */
+export function formatCount(count: number): string {
+  return String(count).replace(/\B(?=(\d{3})+$)/g, '\u202f');
+}
