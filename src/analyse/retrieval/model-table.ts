@@ -4,7 +4,7 @@ import { HARMONIC_POWER, harmonicTerms } from './cmod5n.ts';
 export const SLOWEST_MS = 0.2;
 export const FASTEST_MS = 50;
 
-/** Distance between tabulated speeds, m/s. Cubic interpolation between them is within 1e-5 of the function itself. */
+/** Distance between tabulated speeds, m/s. From 0.4 m/s up, cubic interpolation between them is within 1e-4 of the function. */
 const STEP_MS = 0.1;
 
 /** One more entry before and two after the range, so that interpolation always has four. */
