@@ -20,6 +20,7 @@ export interface Loader {
 export function startLoader(workerUrl: URL, archivePath: string, hear: (news: LoadNews) => void): Loader {
   let worker: Worker | null = null;
   let lastTaskId = 0;
+  /** The file that each unfinished task is at. */
   const openTasks = new Map<number, string>();
 
   function onNews(news: LoadNews): void {
@@ -32,7 +33,7 @@ export function startLoader(workerUrl: URL, archivePath: string, hear: (news: Lo
     worker = null;
     for (const [taskId, file] of openTasks) {
       const problem = new Problem('internal', `Loading ended unexpectedly: ${reason.message}`);
-      if (file) hear({ kind: 'file fate', taskId, fate: tellFate(file, 'refused', [], [problem]) });
+      hear({ kind: 'file fate', taskId, fate: tellFate(file, 'refused', [], [problem]) });
       hear({ kind: 'load ended', taskId, wasStopped: true });
     }
     openTasks.clear();
@@ -49,7 +50,8 @@ export function startLoader(workerUrl: URL, archivePath: string, hear: (news: Lo
   return {
     load(sources, isDemonstration) {
       const taskId = ++lastTaskId;
-      openTasks.set(taskId, '');
+      const [first] = sources;
+      openTasks.set(taskId, 'bytes' in first ? first.name : first.path);
       const moved = sources.flatMap((source) => ('bytes' in source ? [source.bytes] : []));
       const ask: LoadAsk = { kind: 'load', task: { taskId, sources, isDemonstration } };
       findWorker().postMessage(ask, moved);
