@@ -15,6 +15,12 @@ export interface DemonstrationWatch {
 /** When the demonstration's watch stands: 46 minutes after the middle of its newest pass. */
 export const demonstrationNowMs = Date.UTC(2031, 0, 17, 17, 58);
 
+/** What the demonstration is called wherever it is shown. */
+export const demonstrationTitle = 'A winter storm on the date line: invented data';
+
+/** The view that the demonstration opens with: the storm, the islands, and the water that nobody looked at. */
+export const demonstrationView = { lon: -178, lat: 51.5, zoom: 3.9 };
+
 /** Platform numbers that are not assigned in common code table C-5, as the passes are invented. */
 const platformCodes = { firstFanBeam: 901, secondFanBeam: 902, pencilBeam: 903 };
 
@@ -55,7 +61,7 @@ function modelWindAt(lon: number, lat: number, timeMs: number) {
 export function makeDemonstrationWatch(land: Polygons): DemonstrationWatch {
   const surface: Surface = {
     isLand: rasterLand(land, { west: 140, south: 30, widthDeg: 85, heightDeg: 40 }, 0.02),
-    isIce: (lon, lat) => lat > 61.3 + 0.8 * Math.sin(lon / 4),
+    isIce: (lon, lat) => lat > 61.3 + 0.8 * Math.sin((lon * Math.PI) / 9),
   };
   const sea = { windAt: trueWindAt, modelWindAt, surface };
   return {
