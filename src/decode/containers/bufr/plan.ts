@@ -109,10 +109,13 @@ function planReplication(descriptors: readonly PlacedDescriptor[], index: number
     throw new Problem('damaged', `Replication ${name} repeats more descriptors than follow it.`, { byte });
   }
   const counter = isDelayed ? planCounter(descriptors[index + 1]) : null;
-  const before = { ...state };
-  const steps = planList(descriptors.slice(first, first + x), state);
-  if (state.addedWidth !== before.addedWidth || state.addedScale !== before.addedScale) {
-    throw new Problem('unsupported-operator', 'A repeated block leaves operator 2 01 or 2 02 changed.', { byte });
+  const body = descriptors.slice(first, first + x);
+  const { addedWidth, addedScale } = state;
+  const steps = planList(body, state);
+  // An operator that a block leaves in force is in force when the block begins again.
+  const isChanged = state.addedWidth !== addedWidth || state.addedScale !== addedScale;
+  if (isChanged && JSON.stringify(planList(body, { ...state })) !== JSON.stringify(steps)) {
+    throw new Problem('unsupported-operator', 'A repeated block is packed otherwise each time it is met.', { byte });
   }
   return { times: isDelayed ? null : y, counter, steps };
 }
