@@ -6,28 +6,31 @@ import type { NetcdfHeader, NetcdfVariable } from './read-netcdf-header.ts';
 /** All values of a variable in its own type, rows first; Problem 'truncated' when the file does not hold them. */
 export function readVariable(bytes: Uint8Array, header: NetcdfHeader, variable: NetcdfVariable): NetcdfArray {
   checkExtent(bytes, header, variable);
-  const target = netcdfTypes[variable.type].create(variable.runs * variable.runLength);
-  copyRuns(bytes, header, variable, target);
+  const count = variable.runs * variable.runLength;
+  const target = netcdfTypes[variable.type].create(count);
+  copyRange(bytes, header, variable, 0, count, target);
   return target;
 }
 
 /**
- * All values of a variable as numbers, rows first, neither scaled nor masked. One array type for every variable keeps
- * the loops after it fast. Of 64-bit integers the nearest number.
+ * Some values of a variable as numbers, neither scaled nor masked, as many as the target holds, from the value of an
+ * index on (rows first). Of 64-bit integers the nearest number. Problem 'truncated' when the file does not hold the
+ * whole variable.
  */
-export function readVariableAsNumbers(
+export function readNumbers(
   bytes: Uint8Array,
   header: NetcdfHeader,
   variable: NetcdfVariable,
-): Float64Array<ArrayBuffer> {
+  first: number,
+  target: Float64Array,
+): void {
   checkExtent(bytes, header, variable);
-  const target = new Float64Array(variable.runs * variable.runLength);
-  copyRuns(bytes, header, variable, target);
-  return target;
+  if (first + target.length > variable.runs * variable.runLength) throw new RangeError(`${variable.name} is shorter`);
+  copyRange(bytes, header, variable, first, target.length, target);
 }
 
-/** Asks whether the file reaches as far as the header says, before any memory is taken for it. */
-function checkExtent(bytes: Uint8Array, header: NetcdfHeader, variable: NetcdfVariable): void {
+/** A Problem 'truncated' when the file does not reach as far as its header says; to be asked before memory is taken. */
+export function checkExtent(bytes: Uint8Array, header: NetcdfHeader, variable: NetcdfVariable): void {
   if (variable.runs === 0 || variable.runLength === 0) return;
   const runBytes = variable.runLength * netcdfTypes[variable.type].byteLength;
   const end = variable.begin + (variable.runs - 1) * header.recordStride + runBytes;
@@ -40,10 +43,24 @@ function checkExtent(bytes: Uint8Array, header: NetcdfHeader, variable: NetcdfVa
   }
 }
 
-function copyRuns(bytes: Uint8Array, header: NetcdfHeader, variable: NetcdfVariable, target: NetcdfArray): void {
+/** Copies values run by run: a record variable's records lie apart, any other variable is one run. */
+function copyRange(
+  bytes: Uint8Array,
+  header: NetcdfHeader,
+  variable: NetcdfVariable,
+  first: number,
+  count: number,
+  target: NetcdfArray,
+): void {
   const view = new DataView(bytes.buffer, bytes.byteOffset, bytes.byteLength);
-  for (let run = 0; run < variable.runs; run++) {
-    const byteOffset = variable.begin + run * header.recordStride;
-    copyValues(view, byteOffset, variable.runLength, variable.type, target, run * variable.runLength);
+  const { byteLength } = netcdfTypes[variable.type];
+  let copied = 0;
+  while (copied < count) {
+    const run = Math.floor((first + copied) / variable.runLength);
+    const within = (first + copied) % variable.runLength;
+    const length = Math.min(count - copied, variable.runLength - within);
+    const byteOffset = variable.begin + run * header.recordStride + within * byteLength;
+    copyValues(view, byteOffset, length, variable.type, target, copied);
+    copied += length;
   }
 }

@@ -1,7 +1,7 @@
 import type { Problem } from '../../../problems/problem.ts';
 import { NEVER_LOOKED, type Swath, WIND } from '../../../swath/swath.ts';
 import { flagBit } from '../../../wind/flags.ts';
-import { checkStatedSpeeds } from './check-stated-speeds.ts';
+import { checkStatedSpeeds, tallyWords, type WordTallies } from './check-stated-speeds.ts';
 import { type FlagField, type FlagMeaning, hasMeaning, MISSING_FLAGS } from './read-flag-field.ts';
 
 /**
@@ -16,15 +16,15 @@ export function applyFlags(swath: Swath, fields: FlagField[]): Problem[] {
     markQualityUnknown(swath);
     return [];
   }
-  swath.rawFlags.set(fields[0].raw);
-  swath.flagReading = fields[0].meanings ? 'as-file-states' : 'unknown';
   const problems: Problem[] = [];
-  for (const field of fields) {
-    if (!field.meanings) continue;
-    const doubt = checkStatedSpeeds(swath, field);
+  for (const [index, field] of fields.entries()) {
+    const tallies = tallyWords(swath, field);
+    const doubt = checkStatedSpeeds(field, tallies);
     if (doubt) problems.push(doubt);
-    if (doubt && field === fields[0]) swath.flagReading = 'unknown';
-    if (!doubt) mapFlags(swath, field, field.meanings, field === fields[0]);
+    const meanings = doubt ? null : field.meanings;
+    if (meanings) mapFlags(swath, field, meanings, index === 0);
+    if (meanings) tellUnreviewed(swath, field, meanings, tallies);
+    if (index === 0) swath.flagReading = meanings ? 'as-file-states' : 'unknown';
   }
   if (swath.flagReading === 'unknown') {
     swath.notes.push('What the flags of this file mean is not certain: the quality of its winds is unknown, not good.');
@@ -40,36 +40,31 @@ function markQualityUnknown(swath: Swath): void {
   }
 }
 
-/** What one raw word means, and how many winds have it. */
+/** What one raw word means of a cell with a wind, and of one without. */
 interface WordReading {
   ofWinds: number;
   ofEmptyCells: number;
-  winds: number;
 }
 
 function mapFlags(swath: Swath, field: FlagField, meanings: FlagMeaning[], isFirst: boolean): void {
+  const { state, flags } = swath;
   const readings = new Map<number, WordReading>();
+  const unknown = isFirst ? flagBit.qualityUnknown : 0;
+  readings.set(MISSING_FLAGS, { ofWinds: unknown, ofEmptyCells: unknown });
   let lastRaw = -1;
-  let reading: WordReading = { ofWinds: 0, ofEmptyCells: 0, winds: 0 };
-  for (let cell = 0; cell < swath.state.length; cell++) {
-    const state = swath.state[cell];
-    if (state === NEVER_LOOKED) continue;
+  let ofWinds = 0;
+  let ofEmptyCells = 0;
+  for (let cell = 0; cell < state.length; cell++) {
     const raw = field.raw[cell];
-    if (raw === MISSING_FLAGS) {
-      if (isFirst) swath.flags[cell] |= flagBit.qualityUnknown;
-      continue;
-    }
     if (raw !== lastRaw) {
-      reading = readings.get(raw) ?? readWord(raw, meanings);
+      const reading = readings.get(raw) ?? readWord(raw, meanings);
       readings.set(raw, reading);
+      ({ ofWinds, ofEmptyCells } = reading);
       lastRaw = raw;
     }
-    if (state === WIND) {
-      swath.flags[cell] |= reading.ofWinds;
-      reading.winds++;
-    } else swath.flags[cell] |= reading.ofEmptyCells;
+    if (state[cell] === WIND) flags[cell] |= ofWinds;
+    else if (state[cell] !== NEVER_LOOKED) flags[cell] |= ofEmptyCells;
   }
-  tellUnreviewed(swath, field, meanings, readings);
 }
 
 /**
@@ -80,21 +75,16 @@ function readWord(raw: number, meanings: FlagMeaning[]): WordReading {
   const set = meanings.filter((meaning) => meaning.flag !== null && hasMeaning(raw, meaning));
   const flagsOf = (list: FlagMeaning[]) => list.reduce((flags, { flag }) => flags | (flag ? flagBit[flag] : 0), 0);
   const believed = set.some(({ family }) => family === 'ku-band') ? set.slice(0, 1) : set;
-  return { ofWinds: flagsOf(set), ofEmptyCells: flagsOf(believed), winds: 0 };
+  return { ofWinds: flagsOf(set), ofEmptyCells: flagsOf(believed) };
 }
 
 /** Words nobody reviewed are shown as the file has them, never turned into good or bad by their wording. */
-function tellUnreviewed(
-  swath: Swath,
-  field: FlagField,
-  meanings: FlagMeaning[],
-  readings: Map<number, WordReading>,
-): void {
+function tellUnreviewed(swath: Swath, field: FlagField, meanings: FlagMeaning[], tallies: WordTallies): void {
   const unreviewed = meanings.filter(({ flag }) => flag === null);
   if (unreviewed.length === 0) return;
   const counted = unreviewed.map((meaning) => {
     let winds = 0;
-    for (const [raw, reading] of readings) if (hasMeaning(raw, meaning)) winds += reading.winds;
+    for (const [raw, tally] of tallies) if (hasMeaning(raw, meaning)) winds += tally.winds;
     return `${meaning.word} (set in ${winds} winds)`;
   });
   swath.notes.push(`Flags of ${field.name} we have not reviewed, not judged here: ${counted.join(', ')}.`);
@@ -102,8 +92,9 @@ function tellUnreviewed(
 
 /** No rain flag must not be taken for no rain. */
 function tellRainCheck(swath: Swath): void {
-  const rainFlags = flagBit.rain | flagBit.rainCheckNotUsable;
-  if (swath.flags.every((flags) => (flags & rainFlags) === 0)) {
+  let found = 0;
+  for (let cell = 0; cell < swath.flags.length; cell++) found |= swath.flags[cell];
+  if ((found & (flagBit.rain | flagBit.rainCheckNotUsable)) === 0) {
     swath.notes.push('No cell has a rain flag: that may mean that rain was not checked, not that there was none.');
   }
 }

@@ -9,6 +9,15 @@ export interface CfFile {
   problems: Problem[];
 }
 
+/** Adds a problem to the file's own, once: several passes of a merged file may run into the same one. */
+export function tellProblem(file: CfFile, problem: Problem): void {
+  const placed = problem.at({ file: file.header.fileName });
+  const isTold = file.problems.some(
+    ({ message, place }) => message === placed.message && place.part === placed.place.part,
+  );
+  if (!isTold) file.problems.push(placed);
+}
+
 type Attributes = Map<string, NetcdfValue>;
 
 /** A text attribute, trimmed; empty where there is none. */

@@ -2,10 +2,9 @@ import { Problem } from '../../../problems/problem.ts';
 import type { FlagName } from '../../../wind/flags.ts';
 import { netcdfTypes } from '../../containers/netcdf-classic/netcdf-types.ts';
 import type { NetcdfVariable } from '../../containers/netcdf-classic/read-netcdf-header.ts';
-import { readVariableAsNumbers } from '../../containers/netcdf-classic/read-variable.ts';
-import { type CfFile, numberAttribute, textAttribute } from './cf-file.ts';
+import { type CfFile, numberAttribute, tellProblem, textAttribute } from './cf-file.ts';
 import { type FlagFamily, reviewFlagWord } from './flag-words.ts';
-import { asUnsigned, missingIntervals } from './unpack-values.ts';
+import { asUnsigned, missingIntervals, readInChunks } from './unpack-values.ts';
 
 /** A raw flag word that is missing. */
 export const MISSING_FLAGS = 0xffffffff;
@@ -27,19 +26,18 @@ export interface FlagField {
   meanings: FlagMeaning[] | null;
 }
 
-/** Reads a flag variable: CF conventions 3.5. A list whose parts do not match in number is a Problem told, not thrown. */
-export function readFlagField(file: CfFile, variable: NetcdfVariable): FlagField {
+/**
+ * Reads a flag variable's words of a pass into `raw`: CF conventions 3.5. A list whose parts do not match in number is
+ * a Problem told, not thrown.
+ */
+export function readFlagField(file: CfFile, variable: NetcdfVariable, first: number, raw: Uint32Array): FlagField {
   const meanings = readMeanings(variable);
   if (!meanings) {
-    file.problems.push(
-      new Problem(
-        'flags-unknown',
-        `The flag words of ${variable.name} and their masks or values do not match in number, so its flags are unknown.`,
-        { file: file.header.fileName, part: `variable ${variable.name}` },
-      ),
-    );
+    const sentence = `The flag words of ${variable.name} and their masks or values do not match in number, so its flags are unknown.`;
+    tellProblem(file, new Problem('flags-unknown', sentence, { part: `variable ${variable.name}` }));
   }
-  return { name: variable.name, raw: readRawWords(file, variable), meanings };
+  readRawWords(file, variable, first, raw);
+  return { name: variable.name, raw, meanings };
 }
 
 /** Whether a cell's word has a meaning of the list. */
@@ -71,26 +69,37 @@ function readMeanings(variable: NetcdfVariable): FlagMeaning[] | null {
   });
 }
 
-/**
- * The words as unsigned numbers, missing ones as MISSING_FLAGS. Missing is the stated fill, a word outside the stated
- * range, or all bits of the type set (with or without the sign), which versions of one writer use unstated.
- */
-function readRawWords(file: CfFile, variable: NetcdfVariable): Uint32Array {
-  const values = readVariableAsNumbers(file.bytes, file.header, variable);
-  const bitCount = 8 * Math.min(4, netcdfTypes[variable.type].byteLength);
-  const allSet = 2 ** bitCount - 1;
-  const allButSign = 2 ** (bitCount - 1) - 1;
-  const intervals = missingIntervals(variable, true);
-  const [, rangeHighest = Infinity] = numberAttribute(variable.attributes, 'valid_range');
-  const highest = numberAttribute(variable.attributes, 'valid_max')[0] ?? rangeHighest;
-  const most = highest < 0 ? asUnsigned(highest, variable) : highest;
+/** The words as unsigned numbers, missing ones as MISSING_FLAGS. */
+function readRawWords(file: CfFile, variable: NetcdfVariable, first: number, raw: Uint32Array): void {
+  const isMissing = missingTest(variable);
+  let last = Number.NaN;
+  let word = MISSING_FLAGS;
+  readInChunks(file, variable, first, raw.length, (values, start) => {
+    for (let i = 0; i < values.length; i++) {
+      // Neighbours mostly share their word.
+      if (values[i] !== last) {
+        last = values[i];
+        word = asUnsigned(last, variable);
+        if (isMissing(word)) word = MISSING_FLAGS;
+      }
+      raw[start + i] = word;
+    }
+  });
+}
 
-  const raw = new Uint32Array(values.length);
-  for (let i = 0; i < values.length; i++) {
-    const word = asUnsigned(values[i], variable);
-    let isMissing = !(word <= most) || word === allSet || word === allButSign;
-    for (const { lowest, highest } of intervals) if (word >= lowest && word <= highest) isMissing = true;
-    raw[i] = isMissing ? MISSING_FLAGS : word;
-  }
-  return raw;
+/**
+ * Which words are missing: the stated fill, a word outside the stated range, and all bits of the type set (with or
+ * without the sign), which versions of one writer use unstated.
+ */
+function missingTest(variable: NetcdfVariable): (word: number) => boolean {
+  const bitCount = 8 * Math.min(4, netcdfTypes[variable.type].byteLength);
+  const intervals = missingIntervals(variable, true);
+  const stated =
+    numberAttribute(variable.attributes, 'valid_max')[0] ?? numberAttribute(variable.attributes, 'valid_range')[1];
+  const most = stated === undefined ? Infinity : asUnsigned(stated, variable);
+  return (word) =>
+    !(word <= most) ||
+    word === 2 ** bitCount - 1 ||
+    word === 2 ** (bitCount - 1) - 1 ||
+    intervals.some(({ lowest, highest }) => word >= lowest && word <= highest);
 }

@@ -5,16 +5,19 @@ import { type CfFile, textAttribute } from './cf-file.ts';
 import { unpackValues } from './unpack-values.ts';
 
 /**
- * The time of every cell, milliseconds since 1970-01-01 UTC, NaN where missing. A time for each row (or for each of
- * several passes) is spread over its cells.
+ * Sets the time of every cell of a pass, milliseconds since 1970-01-01 UTC, NaN where missing. A time for each row (or
+ * for each pass of a merged file) is spread over its cells. `first` is the index of the pass's first cell in the file.
  */
-export function readTimes(file: CfFile, variable: NetcdfVariable, dimensions: NetcdfDimension[]): Float64Array {
+export function readTimes(
+  file: CfFile,
+  variable: NetcdfVariable,
+  dimensions: NetcdfDimension[],
+  first: number,
+  timeMs: Float64Array,
+): void {
   const place = { file: file.header.fileName, part: `variable ${variable.name}` };
-  const { stepMs, originMs } = parseTimeUnits(
-    textAttribute(variable.attributes, 'units'),
-    textAttribute(variable.attributes, 'calendar'),
-    place,
-  );
+  const units = textAttribute(variable.attributes, 'units');
+  const unit = parseTimeUnits(units, textAttribute(variable.attributes, 'calendar'), place);
   const own = variable.dimensions.filter((dimension) => dimension.length !== 1);
   if (own.some((dimension) => !dimensions.includes(dimension))) {
     throw new Problem(
@@ -23,12 +26,17 @@ export function readTimes(file: CfFile, variable: NetcdfVariable, dimensions: Ne
       place,
     );
   }
-  const times = unpackValues(file, variable, Number.POSITIVE_INFINITY);
-  for (let i = 0; i < times.length; i++) {
-    const timeMs = Math.round(times[i] * stepMs + originMs);
-    times[i] = Math.abs(timeMs) <= MOST_TIME_MS ? timeMs : Number.NaN;
-  }
-  return spread(times, own, dimensions);
+  const isForEachCell = own.length === dimensions.length;
+  const count = own.reduce((product, { length }) => product * length, 1);
+  const times = isForEachCell ? timeMs : new Float64Array(count);
+  const taking = { first: isForEachCell ? first : 0, count: times.length, factor: 1, plausibleHighest: Infinity };
+  unpackValues(file, variable, taking, (values, start) => {
+    for (let i = 0; i < values.length; i++) {
+      const time = values[i] * unit.stepMs + unit.originMs;
+      times[start + i] = Math.abs(time) <= MOST_TIME_MS ? Math.round(time) : Number.NaN;
+    }
+  });
+  if (!isForEachCell) spread(times, own, dimensions, first, timeMs);
 }
 
 /** The furthest time from 1970 that a date can hold: ECMAScript, time values. */
@@ -84,42 +92,45 @@ function parseZone(text: string): number {
   return (zone[1] === '-' ? -1 : 1) * (Number(zone[2]) * 60 + Number(zone[3] ?? 0)) * 60_000;
 }
 
-/** Values of some of the dimensions, repeated along the others. */
-function spread(values: Float64Array, own: NetcdfDimension[], all: NetcdfDimension[]): Float64Array {
-  let cells = 1;
-  for (const dimension of all) cells *= dimension.length;
-  if (values.length === cells) return values;
+/** Repeats values of some of the dimensions along the others, for cells from the index `first` on. */
+function spread(
+  values: Float64Array,
+  own: NetcdfDimension[],
+  all: NetcdfDimension[],
+  first: number,
+  target: Float64Array,
+): void {
   const strides = all.map((dimension) => {
     const at = own.indexOf(dimension);
     return at < 0 ? 0 : own.slice(at + 1).reduce((product, { length }) => product * length, 1);
   });
-  return Float64Array.from({ length: cells }, (_, cell) => {
+  for (let cell = 0; cell < target.length; cell++) {
     let index = 0;
-    let rest = cell;
+    let rest = first + cell;
     for (let axis = all.length - 1; axis >= 0; axis--) {
       index += (rest % all[axis].length) * strides[axis];
       rest = Math.floor(rest / all[axis].length);
     }
-    return values[index];
-  });
+    target[cell] = values[index];
+  }
 }
 
 /**
  * Gives each looked-at cell without a time that of the nearest looked-at cell before it in the array, else after it:
- * its own row, or the row beside it, a few seconds away. Cells never looked at lose theirs. Returns how many were
- * filled; -1 when there is no time at all.
+ * its own row, or the row beside it, a few seconds away. Returns how many were filled; -1 when there is no time at all.
  */
 export function fillMissingTimes(timeMs: Float64Array, state: Uint8Array): number {
-  let known = timeMs.find((time, cell) => state[cell] !== NEVER_LOOKED && !Number.isNaN(time));
-  let filled = 0;
+  let missing = 0;
   for (let cell = 0; cell < timeMs.length; cell++) {
-    if (state[cell] === NEVER_LOOKED) timeMs[cell] = Number.NaN;
-    else if (!Number.isNaN(timeMs[cell])) known = timeMs[cell];
-    else if (known === undefined) return -1;
-    else {
-      timeMs[cell] = known;
-      filled++;
-    }
+    if (Number.isNaN(timeMs[cell]) && state[cell] !== NEVER_LOOKED) missing++;
   }
-  return filled;
+  if (missing === 0) return 0;
+  let nearest = timeMs.find((time, cell) => state[cell] !== NEVER_LOOKED && !Number.isNaN(time));
+  if (nearest === undefined) return -1;
+  for (let cell = 0; cell < timeMs.length; cell++) {
+    if (state[cell] === NEVER_LOOKED) continue;
+    if (Number.isNaN(timeMs[cell])) timeMs[cell] = nearest;
+    else nearest = timeMs[cell];
+  }
+  return missing;
 }

@@ -1,38 +1,101 @@
 import { Problem } from '../../../problems/problem.ts';
 import { type NetcdfValue, netcdfTypeOfArray, netcdfTypes } from '../../containers/netcdf-classic/netcdf-types.ts';
 import type { NetcdfVariable } from '../../containers/netcdf-classic/read-netcdf-header.ts';
-import { readVariableAsNumbers } from '../../containers/netcdf-classic/read-variable.ts';
-import { type CfFile, numberAttribute } from './cf-file.ts';
+import { readNumbers } from '../../containers/netcdf-classic/read-variable.ts';
+import { type CfFile, numberAttribute, tellProblem } from './cf-file.ts';
+
+/** How one variable's values are to be taken. */
+export interface Taking {
+  /** Index of the first value, and how many. */
+  first: number;
+  count: number;
+  /** Factor from the variable's unit to ours. */
+  factor: number;
+  /** The most the quantity can be, in our unit; a stated range far beyond it is not believed. */
+  plausibleHighest: number;
+}
+
+/** So many values at a time stay in the processor's nearest cache. */
+const CHUNK_LENGTH = 2048;
 
 /**
- * A variable's values in its unit, missing ones as NaN: CF conventions 2.5.1 and 8.1. Fill, missing value and valid
- * range are in the packed type and compared before unpacking. Values outside the stated range count as missing, which
- * is told in the file's problems. `plausibleHighest` is the most the quantity can be, in the same unit: a stated range
- * that goes far beyond it was left behind by a copy that unpacked the values, and is not applied.
+ * Hands on a variable's values chunk by chunk, unpacked and in our unit, missing ones as NaN: CF conventions 2.5.1 and
+ * 8.1. Fill, missing value and valid range are in the packed type and compared before unpacking. Values outside the
+ * stated range count as missing, which is told in the file's problems. The chunk is only lent: it is filled anew.
  */
-export function unpackValues(file: CfFile, variable: NetcdfVariable, plausibleHighest: number): Float64Array {
-  const values = readVariableAsNumbers(file.bytes, file.header, variable);
-  const unsigned = isUnsigned(variable);
-  if (unsigned) makeUnsigned(values, variable);
-  const scale = numberAttribute(variable.attributes, 'scale_factor')[0] ?? 1;
-  const offset = numberAttribute(variable.attributes, 'add_offset')[0] ?? 0;
-  const range = statedRange(variable, unsigned, (packed) => packed * scale + offset, plausibleHighest);
-  const [first, ...others] = missingIntervals(variable, unsigned);
-  // Few variables have more than one missing value: those are taken out beforehand, to keep the loop below tight.
-  for (const other of others) eraseInterval(values, other);
+export function unpackValues(
+  file: CfFile,
+  variable: NetcdfVariable,
+  taking: Taking,
+  take: (values: Float64Array, start: number) => void,
+): void {
+  const packing = readPacking(variable, taking);
+  let outside = 0;
+  readInChunks(file, variable, taking.first, taking.count, (values, start) => {
+    outside += unpackChunk(values, packing);
+    take(values, start);
+  });
+  if (outside > 0) tellOutside(file, variable, outside);
+}
 
+/** Hands on some of a variable's values chunk by chunk, as the file packs them. The chunk is only lent. */
+export function readInChunks(
+  file: CfFile,
+  variable: NetcdfVariable,
+  first: number,
+  count: number,
+  take: (values: Float64Array, start: number) => void,
+): void {
+  const scratch = new Float64Array(Math.min(CHUNK_LENGTH, count));
+  for (let start = 0; start < count; start += CHUNK_LENGTH) {
+    const chunk = scratch.subarray(0, Math.min(CHUNK_LENGTH, count - start));
+    readNumbers(file.bytes, file.header, variable, first + start, chunk);
+    take(chunk, start);
+  }
+}
+
+interface Packing {
+  scale: number;
+  offset: number;
+  /** The packed values that count. */
+  range: Interval;
+  missing: Interval[];
+  /** What is added to negative values that are meant unsigned; 0 where none are. */
+  signedGap: number;
+}
+
+function readPacking(variable: NetcdfVariable, { factor, plausibleHighest }: Taking): Packing {
+  const unsigned = isUnsigned(variable);
+  const scale = factor * (numberAttribute(variable.attributes, 'scale_factor')[0] ?? 1);
+  const offset = factor * (numberAttribute(variable.attributes, 'add_offset')[0] ?? 0);
+  return {
+    scale,
+    offset,
+    range: statedRange(variable, unsigned, (packed) => packed * scale + offset, plausibleHighest),
+    missing: missingIntervals(variable, unsigned),
+    signedGap: unsigned ? 2 ** (8 * netcdfTypes[variable.type].byteLength) : 0,
+  };
+}
+
+/** Unpacks in place; returns how many values were outside the stated range. */
+function unpackChunk(values: Float64Array, packing: Packing): number {
+  const { scale, offset, signedGap } = packing;
+  if (signedGap > 0) for (let i = 0; i < values.length; i++) if (values[i] < 0) values[i] += signedGap;
+  // Few variables have more than one missing value: those are taken out beforehand, to keep the loop below tight.
+  for (const interval of packing.missing.slice(1)) eraseInterval(values, interval);
+  const { lowest, highest } = packing.range;
+  const { lowest: lowestFill, highest: highestFill } = packing.missing[0];
   let outside = 0;
   for (let i = 0; i < values.length; i++) {
     const packed = values[i];
-    if (packed >= first.lowest && packed <= first.highest) values[i] = Number.NaN;
-    else if (packed >= range.lowest && packed <= range.highest) values[i] = packed * scale + offset;
+    if (packed >= lowestFill && packed <= highestFill) values[i] = Number.NaN;
+    else if (packed >= lowest && packed <= highest) values[i] = packed * scale + offset;
     else {
       if (!Number.isNaN(packed)) outside++;
       values[i] = Number.NaN;
     }
   }
-  if (outside > 0) file.problems.push(tellOutside(file, variable, outside));
-  return values;
+  return outside;
 }
 
 /** Both ends belong to it. */
@@ -76,10 +139,6 @@ export function asUnsigned(value: number, variable: NetcdfVariable): number {
   return value < 0 ? value + 2 ** (8 * netcdfTypes[variable.type].byteLength) : value;
 }
 
-function makeUnsigned(values: Float64Array, variable: NetcdfVariable): void {
-  for (let i = 0; i < values.length; i++) values[i] = asUnsigned(values[i], variable);
-}
-
 /** The stated range of packed values, applied only if its type and its packing agree with the variable's. */
 function statedRange(
   variable: NetcdfVariable,
@@ -114,11 +173,7 @@ function eraseInterval(values: Float64Array, interval: Interval): void {
   }
 }
 
-function tellOutside(file: CfFile, variable: NetcdfVariable, count: number): Problem {
-  const values = count === 1 ? 'One value' : `${count} values`;
-  return new Problem(
-    'values-out-of-range',
-    `${values} of ${variable.name} outside the range the file itself states; taken as missing.`,
-    { file: file.header.fileName, part: `variable ${variable.name}` },
-  );
+function tellOutside(file: CfFile, variable: NetcdfVariable, count: number): void {
+  const sentence = `${variable.name} leaves the range that the file itself states in ${count} places; taken as missing there.`;
+  tellProblem(file, new Problem('values-out-of-range', sentence, { part: `variable ${variable.name}` }));
 }

@@ -3,7 +3,7 @@ import { expect, test } from 'vitest';
 import { readNetcdfHeader } from '../../../../../src/decode/containers/netcdf-classic/read-netcdf-header.ts';
 import {
   readVariable,
-  readVariableAsNumbers,
+  readNumbers,
 } from '../../../../../src/decode/containers/netcdf-classic/read-variable.ts';
 import { Problem } from '../../../../../src/problems/problem.ts';
 
@@ -11,11 +11,23 @@ import { Problem } from '../../../../../src/problems/problem.ts';
 const fixture = (name: string) =>
   new Uint8Array(readFileSync(new URL(`../../../../fixtures/netcdf/${name}`, import.meta.url)));
 
-function valuesOf(bytes: Uint8Array, variableName: string, read = readVariable as typeof readVariable) {
+function find(bytes: Uint8Array, variableName: string) {
   const header = readNetcdfHeader(bytes, 'test.nc');
   const variable = header.variables.find(({ name }) => name === variableName);
   if (!variable) throw new Error(`no ${variableName}`);
-  return read(bytes, header, variable);
+  return { header, variable };
+}
+
+function valuesOf(bytes: Uint8Array, variableName: string) {
+  const { header, variable } = find(bytes, variableName);
+  return readVariable(bytes, header, variable);
+}
+
+function numbersOf(bytes: Uint8Array, variableName: string, first: number, count: number) {
+  const { header, variable } = find(bytes, variableName);
+  const target = new Float64Array(count);
+  readNumbers(bytes, header, variable, first, target);
+  return target;
 }
 
 for (const version of [1, 2, 5]) {
@@ -61,9 +73,17 @@ test('reads every type of CDF-5 to its limits', () => {
 
 test('gives any type as plain numbers on request', () => {
   const bytes = fixture('every-type.nc');
-  expect(valuesOf(bytes, 'a', readVariableAsNumbers)).toEqual(Float64Array.of(-128, 127));
-  expect(valuesOf(bytes, 'f', readVariableAsNumbers)).toEqual(Float64Array.of(0, 4294967295));
-  expect(valuesOf(bytes, 'h', readVariableAsNumbers)).toEqual(Float64Array.of(0, 2 ** 64));
+  expect(numbersOf(bytes, 'a', 0, 2)).toEqual(Float64Array.of(-128, 127));
+  expect(numbersOf(bytes, 'f', 0, 2)).toEqual(Float64Array.of(0, 4294967295));
+  expect(numbersOf(bytes, 'h', 1, 1)).toEqual(Float64Array.of(2 ** 64));
+});
+
+test('gives a stretch of numbers that begins and ends in the middle of records', () => {
+  expect(numbersOf(fixture('records-cdf1.nc'), 'level', 2, 5)).toEqual(Float64Array.of(3, -4, -5, -6, 700));
+});
+
+test('refuses a stretch that is longer than the variable', () => {
+  expect(() => numbersOf(fixture('records-cdf1.nc'), 'level', 5, 5)).toThrow('level is shorter');
 });
 
 test('reads from bytes that lie inside a larger buffer', () => {

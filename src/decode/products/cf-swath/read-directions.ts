@@ -1,0 +1,41 @@
+import type { NetcdfVariable } from '../../containers/netcdf-classic/read-netcdf-header.ts';
+import { type CfFile, textAttribute } from './cf-file.ts';
+import { type DirectionSense, readDirectionSense } from './direction-sense.ts';
+import { angleFactor } from './units-of-measure.ts';
+import { unpackValues } from './unpack-values.ts';
+
+/** A direction that stands in the file and cannot be one. */
+export const IMPOSSIBLE_DIRECTION = Number.POSITIVE_INFINITY;
+
+/**
+ * Sets directions of a pass as those the wind blows from, 0 <= d < 360, NaN where missing, IMPOSSIBLE_DIRECTION where
+ * wrong. Returns the sense they have in the file; where that or their unit is unknown, nothing is set.
+ */
+export function readDirections(
+  file: CfFile,
+  variable: NetcdfVariable,
+  first: number,
+  directionFrom: Float32Array,
+): DirectionSense {
+  const factor = angleFactor(textAttribute(variable.attributes, 'units'));
+  const sense = readDirectionSense(file.header, variable);
+  if (factor === undefined || sense === 'unknown') return 'unknown';
+  const taking = { first, count: directionFrom.length, factor, plausibleHighest: 360 };
+  const turn = sense === 'to' ? 180 : 0;
+  unpackValues(file, variable, taking, (values, start) => turnDirections(values, turn, directionFrom, start));
+  return sense;
+}
+
+/** From here on a number rounds to 360 in 32 bits. */
+const LEAST_FULL_CIRCLE = 360 - 2 ** -16;
+
+/** Turns directions from -180 to 360 degrees by 180 or 0, so that 0 <= d < 360 also once they are rounded to 32 bits. */
+function turnDirections(values: Float64Array, turn: number, directionFrom: Float32Array, start: number): void {
+  for (let i = 0; i < values.length; i++) {
+    const turned = values[i] + turn;
+    if (turned >= turn - 180 && turned <= turn + 360) {
+      if (turned >= LEAST_FULL_CIRCLE) directionFrom[start + i] = Math.max(turned - 360, 0);
+      else directionFrom[start + i] = turned < 0 ? turned + 360 : turned;
+    } else directionFrom[start + i] = Number.isNaN(turned) ? Number.NaN : IMPOSSIBLE_DIRECTION;
+  }
+}
