@@ -1,4 +1,4 @@
-import { type Swath, WIND } from '../../../swath/swath.ts';
+import { NEVER_LOOKED, type Swath, WIND } from '../../../swath/swath.ts';
 import { flagBit } from '../../../wind/flags.ts';
 import type { FlagTable } from './flag-tables.ts';
 
@@ -21,37 +21,42 @@ const ROUNDING_MS = 0.011;
  * tell, no bit is read and cells with a bit set are marked quality unknown.
  */
 export function readFlags(swath: Swath, table: FlagTable | undefined): void {
-  const hasWords = swath.rawFlags.some((word) => word !== MISSING_WORD);
-  if (!hasWords || !table) {
-    swath.flagReading = hasWords ? 'unknown' : 'absent';
-    swath.notes.push(
-      hasWords
-        ? 'The flag bits cannot be checked against the winds, so they are not read: quality unknown.'
-        : 'The file gives no flags: the quality of its cells is unknown.',
-    );
+  if (!swath.rawFlags.some((word) => word !== MISSING_WORD)) {
+    swath.flagReading = 'absent';
+    swath.notes.push('The file gives no flags: the quality of its cells is unknown.');
     markUnknown(swath, () => true);
-    return;
+  } else if (!table) {
+    leaveUnread(swath, 'The flag bits of this kind of file cannot be checked against its winds', () => true);
+  } else {
+    readCheckedFlags(swath, table);
   }
+}
+
+function readCheckedFlags(swath: Swath, table: FlagTable): void {
   const asTable = countAgreement(swath, table, 0);
   const oneLower = countAgreement(swath, table, 1);
   const { telling } = asTable;
+  const winds = `${telling === 1 ? '1 wind' : `${telling} winds`} of 3 m/s or less or above 30 m/s`;
   if (telling < FEWEST_TELLING_WINDS) {
-    swath.flagReading = 'unknown';
-    swath.notes.push(
-      `Only ${telling} winds are of 3 m/s or less or above 30 m/s, too few to check the flag bits by: ` +
-        'cells with a bit set are marked quality unknown.',
-    );
-    markUnknown(swath, (word) => word !== 0);
-  } else if (isGood(asTable) || isGood(oneLower)) {
-    swath.flagReading = isGood(asTable) ? 'as-table' : 'one-bit-lower';
-    const place = isGood(asTable) ? 'where their table puts them' : 'one place lower than their table puts them';
-    swath.notes.push(`Flag bits stand ${place}: checked against ${telling} winds of 3 m/s or less or above 30 m/s.`);
-    readWords(swath, table, isGood(asTable) ? 0 : 1);
+    leaveUnread(swath, `There are too few winds to check the flag bits by: ${winds}`, (word) => word !== 0);
+  } else if (isGood(asTable)) {
+    swath.flagReading = 'as-table';
+    swath.notes.push(`Flag bits stand where their table puts them: checked against ${winds}.`);
+    readWords(swath, table, 0);
+  } else if (isGood(oneLower)) {
+    swath.flagReading = 'one-bit-lower';
+    swath.notes.push(`Flag bits stand one place lower than their table puts them: checked against ${winds}.`);
+    readWords(swath, table, 1);
   } else {
-    swath.flagReading = 'unknown';
-    swath.notes.push(`The flag bits disagree with ${telling} winds of 3 m/s or less or above 30 m/s: quality unknown.`);
-    markUnknown(swath, () => true);
+    leaveUnread(swath, `The flag bits disagree with ${winds}`, () => true);
   }
+}
+
+function leaveUnread(swath: Swath, reason: string, isUnknown: (word: number) => boolean): void {
+  const count = markUnknown(swath, isUnknown);
+  swath.flagReading = 'unknown';
+  const consequence = count === 0 ? 'no cell has a bit set' : `cells whose quality is thereby unknown: ${count}`;
+  swath.notes.push(`${reason}. They are not read; ${consequence}.`);
 }
 
 interface Agreement {
@@ -102,7 +107,7 @@ function readWords(swath: Swath, table: FlagTable, placesLower: number): void {
       flags = word === MISSING_WORD ? flagBit.qualityUnknown : readWord(word, table, placesLower);
       read.set(word, flags);
     }
-    if (swath.state[cell] === 0) continue;
+    if (swath.state[cell] === NEVER_LOOKED) continue;
     swath.flags[cell] |= flags;
     seen |= flags;
   }
@@ -121,8 +126,13 @@ function readWord(word: number, table: FlagTable, placesLower: number): number {
   return flags;
 }
 
-function markUnknown(swath: Swath, isUnknown: (word: number) => boolean): void {
+/** Marks looked-at cells quality unknown by their flag word; gives how many. */
+function markUnknown(swath: Swath, isUnknown: (word: number) => boolean): number {
+  let count = 0;
   for (let cell = 0; cell < swath.rawFlags.length; cell++) {
-    if (swath.state[cell] !== 0 && isUnknown(swath.rawFlags[cell])) swath.flags[cell] |= flagBit.qualityUnknown;
+    if (swath.state[cell] === NEVER_LOOKED || !isUnknown(swath.rawFlags[cell])) continue;
+    swath.flags[cell] |= flagBit.qualityUnknown;
+    count++;
   }
+  return count;
 }

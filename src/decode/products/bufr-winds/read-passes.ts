@@ -1,5 +1,5 @@
 import { Problem } from '../../../problems/problem.ts';
-import { type Swath, type Viewing, WIND } from '../../../swath/swath.ts';
+import { type Solutions, type Swath, type Viewing, WIND } from '../../../swath/swath.ts';
 import { openMessage } from '../../containers/bufr/open-message.ts';
 import { arrangePasses, isPlaced } from './arrange-passes.ts';
 import { type CellTable, createCellTable, fillCells } from './cell-table.ts';
@@ -24,7 +24,11 @@ export function readPasses(bytes: Uint8Array, messages: readonly SurveyedMessage
   }
   const choices = chooseWinds(table);
   if (choices.unselected > 0) {
-    notes.push(`${choices.unselected} cells have winds but none selected: the likeliest speed is given, no direction.`);
+    const cellsTold = `Cells with winds of which none is selected: ${choices.unselected}`;
+    notes.push(`${cellsTold}. They show the likeliest speed and no direction.`);
+  }
+  if (choices.withoutDirection > 0) {
+    notes.push(`Cells whose selected wind has no usable direction: ${choices.withoutDirection}.`);
   }
   dropEmptyParts(cells);
   if (!cells.solutions) notes.push('The file holds radar looks but no winds.');
@@ -56,20 +60,40 @@ function readTable(bytes: Uint8Array, messages: readonly SurveyedMessage[]): Cel
 }
 
 function describeOutside(outside: ReadonlyMap<string, number>): Problem {
-  const list = [...outside].map(([kind, count]) => `${kind} ${count} times`).join(', ');
-  return new Problem(
-    'values-out-of-range',
-    `Values outside their physical range were left out and their cells marked: ${list}.`,
-  );
+  const list = [...outside].map(([kind, count]) => `${kind} (${count})`).join(', ');
+  const message = `Values outside their physical range are left out and their cells marked: ${list}.`;
+  return new Problem('values-out-of-range', message);
 }
 
 /** Parts that hold no value at all are no parts of the swath. */
 function dropEmptyParts(cells: Swath): void {
   const isEmpty = (values: Float32Array) => values.every(Number.isNaN);
-  if (cells.solutions && isEmpty(cells.solutions.speedMs)) cells.solutions = null;
+  if (cells.solutions) cells.solutions = dropEmptySlots(cells.solutions);
   if (cells.beams && isEmpty(cells.beams.backscatterDb)) cells.beams = null;
   if (cells.background && isEmpty(cells.background.speedMs)) cells.background = null;
   if (cells.iceProbability && isEmpty(cells.iceProbability)) cells.iceProbability = null;
+}
+
+/** Solutions without the last slots that no cell uses; null where none is used. */
+function dropEmptySlots(solutions: Solutions): Solutions | null {
+  const { slots, speedMs } = solutions;
+  let used = slots;
+  const isUsed = (slot: number) => {
+    for (let i = slot; i < speedMs.length; i += slots) if (!Number.isNaN(speedMs[i])) return true;
+    return false;
+  };
+  while (used > 0 && !isUsed(used - 1)) used--;
+  if (used === slots) return solutions;
+  const keep = (values: Float32Array) => values.filter((_, i) => i % slots < used);
+  return used === 0
+    ? null
+    : {
+        slots: used,
+        speedMs: keep(speedMs),
+        directionFrom: keep(solutions.directionFrom),
+        probability: keep(solutions.probability),
+        fitDistance: keep(solutions.fitDistance),
+      };
 }
 
 /** Cells without a place cannot be drawn or searched; that they exist, and how strong their wind is, must not be lost. */
@@ -83,8 +107,8 @@ function tellUnplaced(table: CellTable, problems: Problem[]): void {
     strongestMs = Math.max(strongestMs, table.cells.speedMs[cell]);
   }
   if (unplaced === 0) return;
-  const strongest = winds > 0 ? `; ${winds} of them have a wind, up to ${strongestMs.toFixed(1)} m/s` : '';
-  const message = `${unplaced} cells have no usable position, time or cell number and are left out${strongest}.`;
+  const strongest = winds > 0 ? `, of which ${winds} with a wind of up to ${strongestMs.toFixed(1)} m/s` : '';
+  const message = `Cells left out for want of a usable position, time or cell number: ${unplaced}${strongest}.`;
   problems.push(new Problem('damaged', message));
 }
 

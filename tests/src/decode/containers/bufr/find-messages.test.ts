@@ -69,7 +69,26 @@ test('refuses sections that do not fit in their message', () => {
 test('reads editions 0, 2, 3 and 4 alike, with or without an optional section', () => {
   const sections3to5 = edition3.subarray(8 + edition3[10]);
   const section2 = [0, 0, 8, 0, 1, 2, 3, 4];
-  const section1 = (octet4: number, flag: number) => [0, 0, 18, octet4, 0, 210, 0, flag, 12, 8, 13, 1, 98, 2, 3, 4, 5, 0];
+  const section1 = (octet4: number, flag: number) => [
+    0,
+    0,
+    18,
+    octet4,
+    0,
+    210,
+    0,
+    flag,
+    12,
+    8,
+    13,
+    1,
+    98,
+    2,
+    3,
+    4,
+    5,
+    0,
+  ];
   const length = 8 + 18 + section2.length + sections3to5.length;
   const bytes = join(
     join('BUFR', section1(0, 0), sections3to5),
@@ -82,7 +101,9 @@ test('reads editions 0, 2, 3 and 4 alike, with or without an optional section', 
   expect(problems).toEqual([]);
   expect(messages.map(({ edition }) => edition)).toEqual([0, 0, 2, 3, 4]);
   expect(messages.map(({ centre }) => centre).slice(0, 3)).toEqual([210, 210, 210]);
-  const values = messages.slice(0, 4).map((message) => [...listSubsets(openMessage(bytes, message))].map((s) => s[12].value));
+  const values = messages
+    .slice(0, 4)
+    .map((message) => [...listSubsets(openMessage(bytes, message))].map((s) => s[12].value));
   for (const list of values) expect(list).toEqual(values[3]);
 });
 

@@ -1,6 +1,6 @@
 import { expect, test } from 'vitest';
 import { isReplication, type PlanStep, planDescriptors } from '../../../../../src/decode/containers/bufr/plan.ts';
-import { Problem } from '../../../../../src/problems/problem.ts';
+import type { Problem } from '../../../../../src/problems/problem.ts';
 
 /** A plan in one line: element(width,scale), [n times ...], [counter: ...]. */
 function draw(steps: readonly PlanStep[]): string {
