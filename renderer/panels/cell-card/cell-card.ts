@@ -1,7 +1,6 @@
 import type { CellCard } from '../../../src/contract/values.ts';
-import { beaufortOfSpeed } from '../../../src/wind/beaufort.ts';
-import { inkOfBeaufort } from '../../state/lights.ts';
 import { type CellPlace, nowOf, type Seen, type SeenStore } from '../../state/seen.ts';
+import { inkOfSpeed } from '../shared/class-ink.ts';
 import { figures } from '../shared/figures.ts';
 import { button, make, setText } from '../shared/make.ts';
 import './cell-card.css';
@@ -64,9 +63,7 @@ function drawCard(card: CellCard, state: Seen): HTMLElement[] {
   ]);
   const figure = make('p', { class: 'card-figure' }, make('span', { class: 'figure' }, head.figure), ` ${head.unit}`);
   figure.hidden = head.figure === '';
-  if (card.speedMs !== null) {
-    figure.style.setProperty('--class-ink', `var(--wind-${inkOfBeaufort[beaufortOfSpeed(card.speedMs)]})`);
-  }
+  if (card.speedMs !== null) figure.style.setProperty('--class-ink', inkOfSpeed(card.speedMs));
   const title = make(
     'p',
     { class: 'card-title' },

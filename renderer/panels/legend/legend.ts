@@ -7,7 +7,9 @@ import { inks, marks, legendWords as words } from './words.ts';
 
 /** What the inks and marks of the chart say; it folds away to a button. */
 export function createLegend(): HTMLElement {
-  const inkList = inks.map(({ beaufort, text }) => make('li', {}, barbPicture(beaufort), ...figures(text)));
+  const inkList = inks.map(({ beaufort, text }) =>
+    make('li', {}, barbPicture(beaufort), make('span', {}, ...figures(text))),
+  );
   const markList = marks.map(({ mark, text }) => make('li', {}, markPicture(mark), text));
   const fold = button('', () => setOpen(Boolean(body.hidden)), {
     class: 'quiet legend-fold',

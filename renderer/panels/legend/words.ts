@@ -5,7 +5,7 @@ export const legendWords = {
   title: 'Ink by Beaufort',
   marks: 'Marks',
   open: 'Legend',
-  close: 'Hide the legend',
+  close: 'Hide',
 } as const;
 
 /** The six inks: the class whose barb stands for them, and their words. */

@@ -1,8 +1,7 @@
 import type { PassSummary } from '../../../src/contract/values.ts';
-import { beaufortOfSpeed } from '../../../src/wind/beaufort.ts';
 import { isInWindow } from '../../state/clock.ts';
-import { inkOfBeaufort } from '../../state/lights.ts';
 import { nowOf, type Seen, windowOf } from '../../state/seen.ts';
+import { inkOfSpeed } from '../shared/class-ink.ts';
 import { confirmButton } from '../shared/confirm-button.ts';
 import { setFigures } from '../shared/figures.ts';
 import type { Entry } from '../shared/keyed-list.ts';
@@ -74,15 +73,11 @@ export function createPassEntry(first: ListedPass, actions: PassActions): Entry<
       outside.hidden = isInside;
       checkbox.checked = !isHidden;
       element.classList.toggle('is-hidden', isHidden || !isInside);
-      element.style.setProperty('--class-ink', inkOf(pass));
+      element.style.setProperty('--class-ink', pass.maxSpeedMs === null ? 'var(--rule)' : inkOfSpeed(pass.maxSpeedMs));
       showNotes(notes, listNotes(pass));
       howRead.hidden = notes.childElementCount === 0;
     },
   };
-}
-
-function inkOf(pass: PassSummary): string {
-  return pass.maxSpeedMs === null ? 'var(--rule)' : `var(--wind-${inkOfBeaufort[beaufortOfSpeed(pass.maxSpeedMs)]})`;
 }
 
 function showNotes(list: HTMLElement, notes: readonly string[]): void {

@@ -1,7 +1,10 @@
 import { make } from './make.ts';
 
-/** A figure: digits with what joins them and the letters of a hemisphere. */
-const figurePattern = /\d[\d.:°′]*(?:[NSEW]\b)?/g;
+/** A figure: digits, what joins them (a date, a clock time, degrees and minutes) and the letter of a hemisphere. */
+const figurePattern = /\d+(?:[.:-]\d+)*(?:°(?:\d+′)?)?(?:[NSEW]\b)?/g;
+
+/** A figure and its unit stay on one line. */
+const unitPattern = /(\d) (?=(?:kt|m\/s|h|min|days|km|NM|dB|UTC)\b|%)/g;
 
 /** Text with its figures set apart, so that they can be set in the face whose digits are all of one width. */
 export function splitFigures(text: string): { text: string; isFigure: boolean }[] {
@@ -18,14 +21,18 @@ export function splitFigures(text: string): { text: string; isFigure: boolean }[
 
 /** Nodes of a text whose figures stand in the mono face. */
 export function figures(text: string): Node[] {
-  return splitFigures(text).map((piece) =>
+  return splitFigures(holdUnits(text)).map((piece) =>
     piece.isFigure ? make('span', { class: 'figure' }, piece.text) : document.createTextNode(piece.text),
   );
 }
 
 /** Sets an element's text with its figures in the mono face, touching the page only when the text differs. */
 export function setFigures(element: Element, text: string): void {
-  if (element.textContent !== text) element.replaceChildren(...figures(text));
+  if (element.textContent !== holdUnits(text)) element.replaceChildren(...figures(text));
+}
+
+function holdUnits(text: string): string {
+  return text.replace(unitPattern, '$1\u00a0');
 }
 
 /** A count with its thousands set apart by a narrow space: '68 544'. */

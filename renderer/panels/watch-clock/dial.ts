@@ -10,6 +10,7 @@ import {
   RING_INNER,
   RING_OUTER,
   ringPiece,
+  WEDGE_LENGTH,
   type Wedge,
   wedgeOf,
 } from './dial-shapes.ts';
@@ -41,17 +42,18 @@ export function createDial(actions: DialActions): { element: SVGSVGElement; show
   const reach = draw('path', { class: 'dial-reach' });
   const wedges = draw('g', { class: 'dial-wedges' });
   const time = draw('text', { class: 'dial-time', y: 1 });
-  const date = draw('text', { class: 'dial-date', y: 17 });
+  const date = draw('text', { class: 'dial-date', y: 19 });
   const knob = draw('g', { class: 'dial-knob', ...sliderOf(words.reach) }, draw('circle', { r: 6.5 }));
   const hand = draw(
     'g',
     { class: 'dial-hand', ...sliderOf(words.turn) },
-    draw('path', { d: 'M -7 -50 h 14 l -7 11 z' }),
+    draw('path', { d: 'M -6 -56 h 12 l -6 9 z' }),
   );
   const face = draw('circle', { class: 'dial-face', r: RING_INNER });
   const element = draw(
     'svg',
-    { class: 'dial', viewBox: '-126 -108 252 216', role: 'group', 'aria-label': words.dial },
+    { class: 'dial', viewBox: '-126 -116 252 232', role: 'group', 'aria-label': words.dial },
+    draw('circle', { class: 'dial-whole', r: RING_OUTER + 2 + WEDGE_LENGTH }),
     face,
     draw('path', { class: 'dial-ring', d: ringPiece(0, 360, RING_INNER, RING_OUTER), 'fill-rule': 'evenodd' }),
     reach,
@@ -101,7 +103,7 @@ function drawWedges(state: DialState, actions: DialActions): SVGElement[] {
     LABEL_ROOM_DEG,
   );
   return placed.map(({ pass, wedge }, index) => {
-    const [x, y] = pointAt(wedge.middleDeg, wedge.tipRadius + 15);
+    const [x, y] = pointAt(wedge.middleDeg, wedge.tipRadius + labelRoom(wedge.middleDeg));
     const clock = formatClock(pass.startMs);
     return draw(
       'g',
@@ -113,15 +115,20 @@ function drawWedges(state: DialState, actions: DialActions): SVGElement[] {
   });
 }
 
+/** How far beyond its wedge a label's middle stands: it is wider than high. */
+function labelRoom(angleDeg: number): number {
+  return 8 + 11 * Math.abs(Math.sin((angleDeg * Math.PI) / 180));
+}
+
 function hourMarks(): SVGElement[] {
   return [...Array(DIAL_HOURS).keys()].flatMap((hour) => {
     const angle = angleOfAge(hour * HOUR_MS);
     const [x1, y1] = pointAt(angle, RING_INNER - 1);
-    const [x2, y2] = pointAt(angle, RING_INNER - (hour % 3 ? 5 : 8));
+    const [x2, y2] = pointAt(angle, RING_INNER - 5);
     const mark = draw('line', { class: 'dial-mark', x1, y1, x2, y2 });
     if (hour % 3 || hour === 0) return [mark];
-    const [x, y] = pointAt(angle, RING_INNER - 19);
-    return [mark, draw('text', { class: 'dial-hour', x: x.toFixed(1), y: y.toFixed(1) }, `−${hour}`)];
+    const [x, y] = pointAt(angle, RING_INNER - 17);
+    return [mark, draw('text', { class: 'dial-hour', x: x.toFixed(1), y: y.toFixed(1) }, `${hour} h`)];
   });
 }
 

@@ -1,22 +1,15 @@
-import { formatClock, formatDate } from '../../../src/wind/words.ts';
+import { formatClock } from '../../../src/wind/words.ts';
 import { newestPass, offeredWindowHours, setClock, setWindowHours, standingAt, stepToPass } from '../../state/clock.ts';
 import { nowOf, type SeenStore } from '../../state/seen.ts';
 import { createChoice } from '../shared/choice.ts';
 import { setFigures } from '../shared/figures.ts';
 import { type Entry, keyedList } from '../shared/keyed-list.ts';
-import { button, make } from '../shared/make.ts';
+import { button, make, setText } from '../shared/make.ts';
 import { createSection, type Section } from '../shared/section.ts';
 import { createDial } from './dial.ts';
 import { DIAL_HOURS } from './dial-shapes.ts';
 import './watch-clock.css';
-import {
-  describeHours,
-  describeShare,
-  fromInputValue,
-  summariseClock,
-  toInputValue,
-  clockWords as words,
-} from './words.ts';
+import { describeHours, describeShare, fromTyped, summariseClock, toTyped, clockWords as words } from './words.ts';
 
 /** When this water was seen: the dial, the watch clock and the time window. */
 export function createWatchClock(seen: SeenStore, framePass: (passId: number) => void): Section {
@@ -92,10 +85,15 @@ function createShares(seen: SeenStore, framePass: (passId: number) => void) {
 /** Where 'now' stands: the system's clock, the newest pass, or a moment typed in. */
 function createNow(seen: SeenStore) {
   const input = make('input', {
-    type: 'datetime-local',
+    type: 'text',
+    inputmode: 'numeric',
+    autocomplete: 'off',
+    spellcheck: 'false',
     change: () => {
-      const moment = fromInputValue(input.value);
-      if (moment !== null) setClock(seen, moment);
+      const moment = fromTyped(input.value);
+      input.setCustomValidity(moment === null ? words.nowWrong : '');
+      if (moment === null) input.reportValidity();
+      else setClock(seen, moment);
     },
   });
   const state = make('p', { class: 'soft' });
@@ -107,14 +105,15 @@ function createNow(seen: SeenStore) {
   function show(): void {
     const { settings, passes } = seen.get();
     const nowMs = nowOf(seen.get());
-    if (document.activeElement !== input) input.value = toInputValue(nowMs);
+    if (document.activeElement !== input) input.value = toTyped(nowMs);
     const how = settings.setClockMs === null ? words.followsSystem : words.isSet;
-    setFigures(state, `${formatDate(nowMs)} ${formatClock(nowMs)} UTC, ${how}`);
+    setText(state, how);
     system.disabled = settings.setClockMs === null;
     newest.disabled = passes.length === 0;
   }
   const label = make('label', { class: 'field' }, make('span', {}, words.nowInput), input);
-  return { element: make('div', { class: 'clock-now' }, label, state, newest, system), show };
+  const stand = make('p', { class: 'clock-stand' }, `${words.standAt} `, newest, system);
+  return { element: make('div', { class: 'clock-now' }, label, state, stand), show };
 }
 
 /** How far back the window reaches. */

@@ -10,13 +10,14 @@ export const clockWords = {
   utc: 'UTC',
   earlier: '‹ earlier pass',
   later: 'later pass ›',
-  nowInput: 'Now, UTC',
-  system: 'Follow the system clock',
+  nowInput: 'Now (UTC)',
+  nowWrong: 'Type a date and time in UTC, such as 2031-01-17 04:00.',
+  standAt: 'Stand at',
+  system: 'system clock',
   followsSystem: 'follows the system clock',
-  isSet: 'set, standing still',
-  newest: 'Stand at the newest pass',
-  windowChoice: 'The window, hours back from now',
-  windowInput: 'hours',
+  isSet: 'set by hand, and stands still',
+  newest: 'newest pass',
+  windowChoice: 'Window, hours back',
   nobodySaw: 'No pass in the window saw this water.',
   offDial: (count: number) =>
     count === 1 ? '1 pass is older than the dial.' : `${count} passes are older than the dial.`,
@@ -30,7 +31,7 @@ export function summariseClock(nowMs: number, windowHours: number): string {
 /** A length of the window: '12 h', '45 min', '3 days'. */
 export function describeHours(hours: number): string {
   if (hours < 1) return `${Math.round(hours * 60)} min`;
-  if (hours > 48 && hours % 24 === 0) return `${hours / 24} days`;
+  if (hours > 72 && hours % 24 === 0) return `${hours / 24} days`;
   return `${Number(hours.toFixed(2))} h`;
 }
 
@@ -42,13 +43,16 @@ export function describeShare(share: number): string {
   return `${percent} %`;
 }
 
-/** A moment as the date and time input writes it, in UTC: '2031-01-17T04:00'. */
-export function toInputValue(timeMs: number): string {
-  return `${formatDate(timeMs)}T${formatClock(timeMs)}`;
+/** A moment as it is typed, in UTC: '2031-01-17 04:00'. */
+export function toTyped(timeMs: number): string {
+  return `${formatDate(timeMs)} ${formatClock(timeMs)}`;
 }
 
-/** The moment of a date and time input read as UTC, or null where it is not filled in. */
-export function fromInputValue(value: string): number | null {
-  const timeMs = Date.parse(`${value}Z`);
-  return Number.isNaN(timeMs) ? null : timeMs;
+/** The moment that was typed, read as UTC, or null where it is none: '2031-01-17 04:00', seconds and a final Z allowed. */
+export function fromTyped(text: string): number | null {
+  const match = /^(\d{4}-\d{2}-\d{2})[ T]+(\d{1,2}):?(\d{2})(?::\d{2})? ?(?:Z|UTC)?$/i.exec(text.trim());
+  if (!match) return null;
+  const [, date, hours, minutes] = match;
+  const timeMs = Date.parse(`${date}T${hours.padStart(2, '0')}:${minutes}Z`);
+  return Number.isNaN(timeMs) || formatDate(timeMs) !== date ? null : timeMs;
 }

@@ -1,5 +1,6 @@
 import type { WatchRun } from '../../../src/contract/values.ts';
 import type { Seen, SeenStore } from '../../state/seen.ts';
+import { inkOfSpeed } from '../shared/class-ink.ts';
 import { setFigures } from '../shared/figures.ts';
 import { button, make, setText } from '../shared/make.ts';
 import './watch-line.css';
@@ -33,6 +34,7 @@ export function createWatchLine(
       return;
     }
     shown = watch.runs;
+    if (watch.strongest) sentence.style.setProperty('--strongest', inkOfSpeed(watch.strongest.speedMs));
     showRuns(watch.runs, watch.hiddenGaleWinds > 0);
     if (watchReading.state === 'read') setText(spoken, watch.runs.map((run) => run.text).join(''));
   }
@@ -43,7 +45,7 @@ export function createWatchLine(
       const tag = run.goesTo ? 'BUTTON' : 'SPAN';
       const old = sentence.children[index];
       const node = old?.tagName === tag && !old.classList.contains('show-them') ? (old as HTMLElement) : makeRun(index);
-      node.className = `run run-${run.weight}`;
+      node.className = `run run-${run.weight}${run.goesTo?.kind === 'hidden winds' ? ' run-hidden' : ''}`;
       setFigures(node, run.text);
       return node;
     });

@@ -72,8 +72,9 @@ function createClasses(seen: SeenStore, change: Change) {
   const head = make(
     'tr',
     {},
-    make('th', { scope: 'col', class: 'for-ears' }, words.columns.show),
-    make('th', { scope: 'col', colspan: 3, class: 'for-ears' }, words.columns.name),
+    make('th', { scope: 'col' }, make('span', { class: 'for-ears' }, words.columns.show)),
+    make('td'),
+    make('th', { scope: 'col' }, make('span', { class: 'for-ears' }, words.columns.name)),
     unit,
   );
   const element = make(

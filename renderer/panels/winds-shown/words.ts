@@ -8,7 +8,7 @@ export const windWords = {
   title: 'Winds shown',
   classes: 'By Beaufort class',
   rule: 'Knots are rounded to whole knots first; they decide the class. Gale begins at 33.5 kt.',
-  columns: { show: 'show', force: 'force', name: 'name', knots: 'kt', metresPerSecond: 'm/s' },
+  columns: { show: 'show', name: 'name', knots: 'kt', metresPerSecond: 'm/s' },
   doubts: 'With doubt set by the producer',
   doubtNote: 'Switched off, a wind is not drawn. It stays counted, and the watch line says how many are hidden.',
   show: (beaufort: number) => `Show Beaufort ${beaufort}, ${beaufortNames[beaufort]}`,
