@@ -115,7 +115,8 @@ module.exports = {
       packages: [],
     },
 
-    { name: 'renderer/backend', at: ['renderer/backend'], runs: 'browser', layers: ['contract'], packages: [] },
+    // zod: what a host answers is checked by the contract's own checks before anyone sees it.
+    { name: 'renderer/backend', at: ['renderer/backend'], runs: 'browser', layers: ['contract'], packages: ['zod'] },
     {
       name: 'renderer/state',
       at: ['renderer/state'],

@@ -1,5 +1,6 @@
 import { TOKEN_HEADER } from '../../src/contract/routes.ts';
 import { type Answer, createAnswer } from '../../src/door/answer.ts';
+import { createSchemeHandler } from '../../src/hosts/electron/scheme-handler.ts';
 import { startLoopback } from '../../src/hosts/loopback/start-loopback.ts';
 import type { Desk } from '../../src/operations/desk.ts';
 
@@ -30,6 +31,17 @@ export const carriers: { name: string; open(desk: Desk, staticFolder: string): P
       return {
         fetch: (path, init) => fetch(origin + path, { ...init, headers: { ...init?.headers, [TOKEN_HEADER]: token } }),
         close,
+      };
+    },
+  },
+  {
+    name: "Electron's scheme, in memory",
+    async open(desk, staticFolder) {
+      const handle = createSchemeHandler(createAnswer(desk, { staticFolder }));
+      const gone = new AbortController();
+      return {
+        fetch: (path, init) => handle(new Request(`crosstrack://desk${path}`, { signal: gone.signal, ...init })),
+        close: async () => gone.abort(),
       };
     },
   },

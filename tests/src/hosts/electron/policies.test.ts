@@ -132,8 +132,10 @@ test.each([
   expect(new GuardedSession(7).isCancelled({ url, webContentsId: 7 })).toBe(false);
 });
 
-const mainFrame = { parent: null } as OnBeforeRequestListenerDetails['frame'];
-const innerFrame = { parent: mainFrame } as OnBeforeRequestListenerDetails['frame'];
+type Frame = NonNullable<OnBeforeRequestListenerDetails['frame']>;
+
+const mainFrame = { parent: null } as Frame;
+const innerFrame = { parent: mainFrame } as Frame;
 
 test.each([
   ['another window', { webContentsId: 8 }, true],

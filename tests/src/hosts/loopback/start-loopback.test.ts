@@ -2,7 +2,9 @@ import { type IncomingHttpHeaders, type OutgoingHttpHeaders, request } from 'nod
 import { connect } from 'node:net';
 import { afterEach, expect, test } from 'vitest';
 import { TOKEN_HEADER } from '../../../../src/contract/routes.ts';
+import { createAnswer } from '../../../../src/door/answer.ts';
 import { type Loopback, startLoopback } from '../../../../src/hosts/loopback/start-loopback.ts';
+import type { Desk } from '../../../../src/operations/desk.ts';
 
 // What is right here is fixed outside: RFC 9110 for statuses, the W3C draft Fetch Metadata Request Headers for
 // Sec-Fetch-Site, and the browser attack of DNS rebinding, which shows itself in the Host header alone.
@@ -136,6 +138,43 @@ test('takes no address of another machine in place of a path', async () => {
   });
   expect(reply).toMatch(/^HTTP\/1\.1 400 /);
 });
+
+/** The real door over a desk that is never reached. */
+const realDoor = createAnswer({} as Desk, { staticFolder: '.' });
+
+test('refuses a body that says it is too large, before it comes', async () => {
+  const host = await openHost(realDoor);
+  const headers = withToken(host, { 'content-length': 600 * 1024 * 1024 });
+  const refused = new Promise<number>((resolve, reject) => {
+    const asking = request(`${host.origin}/give/file?name=a`, { method: 'POST', headers, agent: false });
+    asking.on('response', (incoming) => {
+      resolve(incoming.statusCode ?? 0);
+      asking.destroy();
+    });
+    asking.on('error', reject);
+    asking.flushHeaders();
+  });
+  expect(await refused).toBe(413);
+});
+
+test('takes no more of a body of unstated length than a question may have', async () => {
+  const host = await openHost(realDoor);
+  const headers = withToken(host, { 'transfer-encoding': 'chunked' });
+  const body = ' '.repeat(64 * 1024 * 1024);
+  const outcome = await knock(host, 'POST', '/ask/readStatus', headers, body).then(
+    ({ status }) => status,
+    () => 'cut off',
+  );
+  expect([413, 'cut off']).toContain(outcome);
+});
+
+test.each(['/%6eews', '//news', '/NEWS', '/bytes%2fblocks?ids=1', '/ask%2freadStatus'])(
+  'answers nothing without the token at %s, which is spelt like a route',
+  async (path) => {
+    const host = await openHost(realDoor);
+    expect([401, 404]).toContain((await knock(host, 'GET', path)).status);
+  },
+);
 
 test('sends no header that opens it to other origins', async () => {
   const host = await openHost(tellWhatCame);
