@@ -12,21 +12,19 @@ export interface Archive {
   close(): void;
 }
 
-/** How long a writer waits for another connection's transaction before it gives up, ms. */
-const BUSY_TIMEOUT_MS = 10_000;
-
 /** The first 16 bytes of every database file (SQLite file format, section 1.3). */
 const MAGIC = 'SQLite format 3\0';
 
 /**
  * Opens the archive at a path, making it and its folder when there is none and bringing an older one up to date.
  * An archive of a newer program, a file that is no database and a database of something else are refused and left as they are.
+ * `patienceMs` is how long each step waits for another connection's transaction before it gives up.
  */
-export function openArchive(path: string): Archive {
+export function openArchive(path: string, patienceMs = 10_000): Archive {
   refuseOtherFiles(path);
   const database = openDatabase(path);
   try {
-    database.pragma(`busy_timeout = ${BUSY_TIMEOUT_MS}`);
+    database.pragma(`busy_timeout = ${patienceMs}`);
     refuseOtherDatabases(database, path);
     database.pragma('journal_mode = WAL');
     database.pragma('synchronous = NORMAL');
@@ -34,8 +32,7 @@ export function openArchive(path: string): Archive {
     migrate(database);
   } catch (thrown) {
     database.close();
-    if (thrown instanceof Problem) throw thrown;
-    throw new Problem('archive-damaged', `The archive cannot be read: ${(thrown as Error).message}.`, { file: path });
+    throw asArchiveProblem(thrown, path);
   }
   return { path, database, close: () => database.close() };
 }
@@ -50,7 +47,7 @@ function refuseOtherFiles(path: string): void {
     closeSync(file);
     head = bytes.toString('latin1', 0, length);
   } catch (thrown) {
-    throw new Problem('not-readable', `The archive cannot be opened: ${(thrown as Error).message}.`, { file: path });
+    throw asArchiveProblem(thrown, path);
   }
   if (head !== '' && head !== MAGIC) {
     throw new Problem('archive-damaged', 'This file is no archive: it is not a database.', { file: path });
@@ -62,8 +59,18 @@ function openDatabase(path: string): Database.Database {
     mkdirSync(dirname(path), { recursive: true });
     return new Database(path);
   } catch (thrown) {
-    throw new Problem('not-readable', `The archive cannot be opened: ${(thrown as Error).message}.`, { file: path });
+    throw asArchiveProblem(thrown, path);
   }
+}
+
+/** What the database or the file system said: damage is told apart from a place that cannot be written or is in use. */
+function asArchiveProblem(thrown: unknown, path: string): Problem {
+  if (thrown instanceof Problem) return thrown;
+  const { code = '', message } = thrown as Error & { code?: string };
+  if (code.startsWith('SQLITE_CORRUPT') || code === 'SQLITE_NOTADB') {
+    return new Problem('archive-damaged', `The archive is damaged: ${message}.`, { file: path });
+  }
+  return new Problem('not-readable', `The archive cannot be opened: ${message}.`, { file: path });
 }
 
 function refuseOtherDatabases(database: Database.Database, path: string): void {

@@ -91,3 +91,13 @@ test('refuses a database of another program and leaves it as it is', () => {
 test('refuses a folder as an archive', () => {
   expect(() => openArchive(folder)).toThrow(expect.objectContaining({ code: 'not-readable' }));
 });
+
+test('says that an archive is in use, not that it is damaged, while another holds it', () => {
+  const path = inFolder('archive.db');
+  const holder = new Database(path);
+  holder.exec('BEGIN EXCLUSIVE');
+  expect(() => openArchive(path, 1)).toThrow(
+    expect.objectContaining({ code: 'not-readable', message: expect.stringContaining('locked') }),
+  );
+  holder.close();
+});
