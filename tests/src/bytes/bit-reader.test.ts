@@ -19,7 +19,7 @@ test('reads fields that begin and end anywhere in a byte, most significant bit f
 });
 
 test('reads fields of 32 bits from an odd place, and of 53 bits exactly', () => {
-  const wide = '1'.repeat(52) + '0';
+  const wide = `${'1'.repeat(52)}0`;
   expect(readerOf(`1 ${'10'.repeat(16)}`).read(1)).toBe(1);
   const reader = readerOf(`1 ${'10'.repeat(16)} 0 ${wide}`);
   reader.skip(1);

@@ -81,6 +81,7 @@ test('repeats blocks that leave an operator in force only if it makes no differe
 });
 
 test('says whether all ones mean missing: not for 1-bit elements, not for class 31', () => {
-  const steps = planDescriptors([11012, 31000, 31001, 31002], 0).filter((step) => !isReplication(step));
-  expect(steps.map((step) => step.canBeMissing)).toEqual([true, false, false, false]);
+  const steps = planDescriptors([11012, 31000, 31001, 31002], 0);
+  const answers = steps.map((step) => !isReplication(step) && step.canBeMissing);
+  expect(answers).toEqual([true, false, false, false]);
 });
