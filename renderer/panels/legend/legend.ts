@@ -18,7 +18,12 @@ export function createLegend(): HTMLElement {
   const body = make(
     'div',
     { id: 'legend-body' },
-    make('ul', { class: 'legend-inks', 'aria-label': words.title }, ...inkList),
+    make(
+      'ul',
+      { class: 'legend-inks', 'aria-label': words.title },
+      make('li', {}, markPicture('calm'), words.calm),
+      ...inkList,
+    ),
     make('ul', { class: 'legend-marks', 'aria-label': words.marks }, ...markList),
   );
   const title = make('strong', {}, words.title);

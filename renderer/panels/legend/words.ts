@@ -4,6 +4,7 @@ import type { MarkName } from '../shared/mark-picture.ts';
 export const legendWords = {
   title: 'Ink by Beaufort',
   marks: 'Marks',
+  calm: 'calm',
   open: 'Legend',
   close: 'Hide',
 } as const;
@@ -26,7 +27,6 @@ export const marks: readonly { mark: MarkName; text: string }[] = [
   { mark: 'quality', text: 'doubted by the producer' },
   { mark: 'rain', text: 'rain' },
   { mark: 'ice', text: 'ice' },
-  { mark: 'calm', text: 'calm' },
   { mark: 'noDirection', text: 'direction not known' },
   { mark: 'hidden', text: 'hidden by a switch' },
 ];

@@ -121,14 +121,15 @@ function labelRoom(angleDeg: number): number {
 }
 
 function hourMarks(): SVGElement[] {
-  return [...Array(DIAL_HOURS).keys()].flatMap((hour) => {
+  return [...Array(DIAL_HOURS).keys()].map((hour) => {
     const angle = angleOfAge(hour * HOUR_MS);
+    if (hour % 3 === 0 && hour > 0) {
+      const [x, y] = pointAt(angle, RING_INNER - 15);
+      return draw('text', { class: 'dial-hour', x: x.toFixed(1), y: y.toFixed(1) }, `${hour} h`);
+    }
     const [x1, y1] = pointAt(angle, RING_INNER - 1);
     const [x2, y2] = pointAt(angle, RING_INNER - 5);
-    const mark = draw('line', { class: 'dial-mark', x1, y1, x2, y2 });
-    if (hour % 3 || hour === 0) return [mark];
-    const [x, y] = pointAt(angle, RING_INNER - 17);
-    return [mark, draw('text', { class: 'dial-hour', x: x.toFixed(1), y: y.toFixed(1) }, `${hour} h`)];
+    return draw('line', { class: 'dial-mark', x1, y1, x2, y2 });
   });
 }
 

@@ -76,7 +76,7 @@ function createShares(seen: SeenStore, framePass: (passId: number) => void) {
     const passes = state.watch?.passes ?? [];
     const offDial = passes.filter((pass) => nowOf(state) - pass.endMs >= DIAL_HOURS * 3_600_000).length;
     showList(passes);
-    note.hidden = passes.length > 0 && offDial === 0;
+    note.hidden = state.watch === null || (passes.length > 0 && offDial === 0);
     setFigures(note, passes.length === 0 ? words.nobodySaw : words.offDial(offDial));
   }
   return { element: make('div', {}, list, note), show };

@@ -15,7 +15,7 @@ export const clockWords = {
   standAt: 'Stand at',
   system: 'system clock',
   followsSystem: 'follows the system clock',
-  isSet: 'set by hand, and stands still',
+  isSet: 'set, and stands still',
   newest: 'newest pass',
   windowChoice: 'Window, hours back',
   nobodySaw: 'No pass in the window saw this water.',
