@@ -1,0 +1,156 @@
+import type { CustomLayerInterface } from 'maplibre-gl';
+import { copiesIn, reachOf, type View } from '../../map/view.ts';
+import { inkWeightsPx, type Light } from '../../state/lights.ts';
+import { setCamera, setCopy, withCamera } from '../shared/camera.ts';
+import { isInReach } from '../shared/cells.ts';
+import { linkProgram, type Program, parseColour } from '../shared/webgl.ts';
+import barbFragment from './barb.fragment.glsl?raw';
+import barbVertex from './barb.vertex.glsl?raw';
+import { barbShape, MOST_FIVES, PENNANT_BASE_PX } from './barb-shape.ts';
+import type { Run } from './drawing-list.ts';
+import { isLaidOutFor, type Layout, layOutWinds, type Winds } from './layout.ts';
+import markFragment from './mark.fragment.glsl?raw';
+import markVertex from './mark.vertex.glsl?raw';
+import { createWindTexture, type WindTexture } from './wind-texture.ts';
+
+export interface BarbLayer extends CustomLayerInterface {
+  setWinds(winds: Winds): void;
+  setLight(light: Light): void;
+  /** The cells whose wind is drawn in a view. */
+  drawnIn(view: View): number[];
+}
+
+/** A mark reaches so far from its position, CSS pixels. */
+const MARK_REACH_PX = 8;
+
+/**
+ * The winds as barbs and marks in one WebGL2 layer, vertices pulled from a data texture. `isThinned` false draws every
+ * wind at every zoom.
+ */
+export function createBarbLayer(view: () => View, light: Light, isThinned = true): BarbLayer {
+  let inks = light.windInks.flatMap(parseColour);
+  let winds: Winds | null = null;
+  let layout: Layout | null = null;
+  let given: Layout | null = null;
+  let drawing: Drawing | null = null;
+
+  function layOutFor(now: View): Layout | null {
+    if (winds && !(layout && isLaidOutFor(layout, winds, now, isThinned))) layout = layOutWinds(winds, now, isThinned);
+    return layout;
+  }
+
+  return {
+    id: 'barbs',
+    type: 'custom',
+    renderingMode: '2d',
+    setWinds(next) {
+      winds = next;
+    },
+    setLight(next) {
+      inks = next.windInks.flatMap(parseColour);
+    },
+    drawnIn(now) {
+      const laidOut = layOutFor(now);
+      const reach = reachOf(now);
+      return laidOut ? laidOut.drawn.filter((cell) => isInReach(laidOut.winds.cells, cell, reach)) : [];
+    },
+    onAdd(_map, gl) {
+      drawing = createDrawing(gl);
+      given = null;
+    },
+    onRemove() {
+      drawing?.remove();
+      drawing = null;
+    },
+    render() {
+      const now = view();
+      const laidOut = layOutFor(now);
+      if (!laidOut || !drawing) return;
+      if (given !== laidOut) drawing.texture.fill(laidOut.list.words);
+      given = laidOut;
+      drawing.draw(laidOut.list.runs, now, inks);
+    },
+  };
+}
+
+interface Drawing {
+  texture: WindTexture;
+  draw(runs: readonly Run[], view: View, inks: number[]): void;
+  remove(): void;
+}
+
+function createDrawing(gl: WebGL2RenderingContext): Drawing {
+  const barbs = linkProgram(gl, withCamera(barbVertex), barbFragment);
+  const marks = linkProgram(gl, withCamera(markVertex), markFragment);
+  const texture = createWindTexture(gl);
+  const noAttributes = gl.createVertexArray();
+
+  function begin(program: Program, view: View, inks: number[]): void {
+    gl.useProgram(program.program);
+    setCamera(gl, program, view);
+    gl.uniform1f(program.at('u_devicePx'), 1 / devicePixelRatio);
+    gl.uniform1f(program.at('u_size'), sizeAt(view.zoom));
+    gl.uniform1fv(program.at('u_weight'), inkWeightsPx);
+    gl.uniform3fv(program.at('u_ink'), inks);
+    gl.uniform1i(program.at('u_winds'), 0);
+  }
+
+  function drawRun(program: Program, run: Run): void {
+    gl.uniform1i(program.at('u_first'), run.first);
+    if ('mark' in run.shape) {
+      gl.uniform1i(program.at('u_mark'), run.shape.mark);
+      gl.drawArrays(gl.TRIANGLES, 0, run.count * 6);
+      return;
+    }
+    const { pieces, pennants } = piecesOf(run.shape.fives);
+    gl.uniform4fv(program.at('u_piece'), pieces);
+    gl.uniform1i(program.at('u_pieces'), pieces.length / 4);
+    gl.uniform1i(program.at('u_pennants'), pennants);
+    gl.drawArrays(gl.TRIANGLES, 0, run.count * 6 * (pieces.length / 4));
+  }
+
+  return {
+    texture,
+    draw(runs, view, inks) {
+      gl.bindVertexArray(noAttributes);
+      gl.activeTexture(gl.TEXTURE0);
+      texture.bind();
+      gl.enable(gl.BLEND);
+      gl.blendFunc(gl.ONE, gl.ONE_MINUS_SRC_ALPHA);
+      for (const program of [marks, barbs]) {
+        begin(program, view, inks);
+        gl.uniform1f(program.at('u_reach'), MARK_REACH_PX * sizeAt(view.zoom));
+        gl.uniform1f(program.at('u_pennantHalf'), PENNANT_BASE_PX / 2);
+        for (const copy of copiesIn(view)) {
+          setCopy(gl, program, copy);
+          for (const run of runs) if ('mark' in run.shape === (program === marks)) drawRun(program, run);
+        }
+      }
+      gl.bindVertexArray(null);
+    },
+    remove() {
+      gl.deleteProgram(barbs.program);
+      gl.deleteProgram(marks.program);
+      gl.deleteVertexArray(noAttributes);
+      texture.remove();
+    },
+  };
+}
+
+/** Barbs grow a little once cells stand far apart: 1 up to zoom 6, 1.35 from zoom 8. */
+function sizeAt(zoom: number): number {
+  return 1 + 0.35 * Math.max(0, Math.min(1, (zoom - 6) / 2));
+}
+
+const knownPieces = new Map<number, { pieces: Float32Array; pennants: number }>();
+
+/** A barb's pennants and strokes as x, y of one end and x, y of the other. */
+function piecesOf(fives: number): { pieces: Float32Array; pennants: number } {
+  const known = knownPieces.get(fives);
+  if (known) return known;
+  const { strokes, pennants } = barbShape(Math.min(fives, MOST_FIVES));
+  const pieces = Float32Array.from([...pennants, ...strokes].flatMap(({ from, to }) => [...from, ...to]));
+  const made = { pieces, pennants: pennants.length };
+  knownPieces.set(fives, made);
+  return made;
+}

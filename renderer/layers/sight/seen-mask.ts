@@ -1,0 +1,129 @@
+import { copiesIn, type View } from '../../map/view.ts';
+import { setCamera, setCopy, withCamera } from '../shared/camera.ts';
+import { linkProgram } from '../shared/webgl.ts';
+import type { FootprintTiles } from './footprint-tiles.ts';
+import maskFragment from './mask.fragment.glsl?raw';
+import maskVertex from './mask.vertex.glsl?raw';
+
+/** The view as a picture of what was seen, one texel for each device pixel: red seen, green seen without a wind. */
+export interface SeenMask {
+  readonly texture: WebGLTexture;
+  fill(tiles: FootprintTiles): void;
+  draw(view: View): void;
+  remove(): void;
+}
+
+/** Samples for each pixel: edges are smoothed while what overlaps stays one. */
+const SAMPLES = 4;
+const FLOATS_PER_QUAD = 8;
+/** Corners of a quad in the order of its two triangles. */
+const QUAD = [0, 1, 2, 2, 1, 3];
+
+/** A mask on the graphics card; it takes the size of the drawing buffer. */
+export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
+  const program = linkProgram(gl, withCamera(maskVertex), maskFragment);
+  const texture = gl.createTexture();
+  const samples = gl.createRenderbuffer();
+  const sampled = gl.createFramebuffer();
+  const resolved = gl.createFramebuffer();
+  const corners = gl.createBuffer();
+  const indices = gl.createBuffer();
+  const layout = gl.createVertexArray();
+  let size = { width: 0, height: 0 };
+  let indexedQuads = 0;
+  let noWindQuads = 0;
+  let windQuads = 0;
+
+  gl.bindVertexArray(layout);
+  gl.bindBuffer(gl.ARRAY_BUFFER, corners);
+  gl.bindBuffer(gl.ELEMENT_ARRAY_BUFFER, indices);
+  const mercator = gl.getAttribLocation(program.program, 'a_mercator');
+  gl.enableVertexAttribArray(mercator);
+  gl.vertexAttribPointer(mercator, 2, gl.FLOAT, false, 0, 0);
+  gl.bindVertexArray(null);
+
+  function takeSize(): void {
+    const [width, height] = [gl.drawingBufferWidth, gl.drawingBufferHeight];
+    if (size.width === width && size.height === height) return;
+    size = { width, height };
+    gl.bindTexture(gl.TEXTURE_2D, texture);
+    gl.texImage2D(gl.TEXTURE_2D, 0, gl.RG8, width, height, 0, gl.RG, gl.UNSIGNED_BYTE, null);
+    gl.texParameteri(gl.TEXTURE_2D, gl.TEXTURE_MIN_FILTER, gl.NEAREST);
+    gl.texParameteri(gl.TEXTURE_2D, gl.TEXTURE_MAG_FILTER, gl.NEAREST);
+    gl.bindRenderbuffer(gl.RENDERBUFFER, samples);
+    gl.renderbufferStorageMultisample(gl.RENDERBUFFER, SAMPLES, gl.RG8, width, height);
+    gl.bindFramebuffer(gl.FRAMEBUFFER, sampled);
+    gl.framebufferRenderbuffer(gl.FRAMEBUFFER, gl.COLOR_ATTACHMENT0, gl.RENDERBUFFER, samples);
+    gl.bindFramebuffer(gl.FRAMEBUFFER, resolved);
+    gl.framebufferTexture2D(gl.FRAMEBUFFER, gl.COLOR_ATTACHMENT0, gl.TEXTURE_2D, texture, 0);
+  }
+
+  function drawQuads(view: View): void {
+    gl.useProgram(program.program);
+    setCamera(gl, program, view);
+    for (const copy of copiesIn(view)) {
+      setCopy(gl, program, copy);
+      gl.uniform1f(program.at('u_noWind'), 1);
+      gl.drawElements(gl.TRIANGLES, noWindQuads * QUAD.length, gl.UNSIGNED_INT, 0);
+      gl.uniform1f(program.at('u_noWind'), 0);
+      const skipped = noWindQuads * QUAD.length * Uint32Array.BYTES_PER_ELEMENT;
+      gl.drawElements(gl.TRIANGLES, windQuads * QUAD.length, gl.UNSIGNED_INT, skipped);
+    }
+  }
+
+  return {
+    texture,
+    fill(tiles) {
+      noWindQuads = tiles.noWind.length / FLOATS_PER_QUAD;
+      windQuads = tiles.wind.length / FLOATS_PER_QUAD;
+      const floats = new Float32Array(tiles.noWind.length + tiles.wind.length);
+      floats.set(tiles.noWind);
+      floats.set(tiles.wind, tiles.noWind.length);
+      gl.bindVertexArray(layout);
+      gl.bindBuffer(gl.ARRAY_BUFFER, corners);
+      gl.bufferData(gl.ARRAY_BUFFER, floats, gl.DYNAMIC_DRAW);
+      if (noWindQuads + windQuads > indexedQuads) {
+        indexedQuads = Math.max(noWindQuads + windQuads, indexedQuads * 2);
+        gl.bufferData(gl.ELEMENT_ARRAY_BUFFER, indicesFor(indexedQuads), gl.STATIC_DRAW);
+      }
+      gl.bindVertexArray(null);
+    },
+    draw(view) {
+      takeSize();
+      gl.bindFramebuffer(gl.FRAMEBUFFER, sampled);
+      gl.viewport(0, 0, size.width, size.height);
+      gl.disable(gl.BLEND);
+      gl.disable(gl.DEPTH_TEST);
+      gl.disable(gl.STENCIL_TEST);
+      gl.disable(gl.SCISSOR_TEST);
+      gl.disable(gl.CULL_FACE);
+      gl.colorMask(true, true, true, true);
+      gl.clearColor(0, 0, 0, 0);
+      gl.clear(gl.COLOR_BUFFER_BIT);
+      gl.bindVertexArray(layout);
+      drawQuads(view);
+      gl.bindVertexArray(null);
+      gl.bindFramebuffer(gl.READ_FRAMEBUFFER, sampled);
+      gl.bindFramebuffer(gl.DRAW_FRAMEBUFFER, resolved);
+      const { width, height } = size;
+      gl.blitFramebuffer(0, 0, width, height, 0, 0, width, height, gl.COLOR_BUFFER_BIT, gl.NEAREST);
+      gl.bindFramebuffer(gl.FRAMEBUFFER, null);
+    },
+    remove() {
+      gl.deleteProgram(program.program);
+      gl.deleteTexture(texture);
+      gl.deleteRenderbuffer(samples);
+      gl.deleteFramebuffer(sampled);
+      gl.deleteFramebuffer(resolved);
+      gl.deleteBuffer(corners);
+      gl.deleteBuffer(indices);
+      gl.deleteVertexArray(layout);
+    },
+  };
+}
+
+function indicesFor(quads: number): Uint32Array<ArrayBuffer> {
+  const indices = new Uint32Array(quads * QUAD.length);
+  for (let i = 0; i < indices.length; i++) indices[i] = Math.floor(i / QUAD.length) * 4 + QUAD[i % QUAD.length];
+  return indices;
+}
