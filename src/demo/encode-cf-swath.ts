@@ -9,18 +9,20 @@ import { NEVER_LOOKED, type Swath, WIND } from '../swath/swath.ts';
 import { flagBit } from '../wind/flags.ts';
 import { encodeNetcdf, type NetcdfContentVariable } from './encode-netcdf.ts';
 
-/** How a swath is to be written. */
+/** How a swath is to be written, where not as its own band and source suggest. */
 export interface CfSwathOptions {
   /** Which family of files to be like: their layout and flag words differ. */
-  family: FlagFamily;
-  title: string;
-  source: string;
+  family?: FlagFamily;
+  title?: string;
+  source?: string;
   /** The netCDF classic version, 1 where not given. */
   version?: 1 | 2 | 5;
 }
 
 /** A swath as a netCDF file after the CF conventions. Solutions and beams have no place in it. */
-export function encodeCfSwath(swath: Swath, options: CfSwathOptions): Uint8Array<ArrayBuffer> {
+export function encodeCfSwath(swath: Swath, options: CfSwathOptions = {}): Uint8Array<ArrayBuffer> {
+  const family = options.family ?? (swath.band === 'Ku' ? 'ku-band' : 'c-band');
+  const radar = family === 'ku-band' ? 'Ku-band pencil-beam scatterometer' : 'C-band fan-beam scatterometer';
   return encodeNetcdf({
     version: options.version ?? 1,
     dimensions: [
@@ -28,13 +30,13 @@ export function encodeCfSwath(swath: Swath, options: CfSwathOptions): Uint8Array
       { name: 'NUMCELLS', length: swath.columns },
     ],
     attributes: {
-      title: options.title,
+      title: options.title ?? `${radar}, ocean surface wind vectors`,
       Conventions: 'CF-1.6',
-      source: options.source,
+      source: options.source ?? swath.sourceAsRead ?? radar,
       ...(swath.cellSizeM > 0 && { pixel_size_on_horizontal: `${(swath.cellSizeM / 1000).toFixed(1)} km` }),
       comment: 'All wind directions in oceanographic convention (0 deg. flowing North)',
     },
-    variables: options.family === 'c-band' ? listCBandVariables(swath) : listKuBandVariables(swath),
+    variables: family === 'c-band' ? listCBandVariables(swath) : listKuBandVariables(swath),
   });
 }
 

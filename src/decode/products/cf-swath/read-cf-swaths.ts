@@ -68,5 +68,6 @@ function fillTimes(file: CfFile, variables: SwathVariables, first: number, swath
   readTimes(file, variables.time, variables.lat.dimensions, first, swath.timeMs);
   const filled = fillMissingTimes(swath.timeMs, swath.state);
   if (filled < 0) throw new Problem('not-a-swath', 'None of the cells has a time.', place);
-  if (filled > 0) swath.notes.push(`${filled} cells had no time of their own and took that of the cell next to them.`);
+  if (filled > 0)
+    swath.notes.push(`Cells without a time of their own, which took that of the cell next to them: ${filled}.`);
 }

@@ -2,13 +2,10 @@ import type { NetcdfVariable } from '../../containers/netcdf-classic/read-netcdf
 import { type CfFile, textAttribute } from './cf-file.ts';
 import { type DirectionSense, readDirectionSense } from './direction-sense.ts';
 import { angleFactor } from './units-of-measure.ts';
-import { unpackValues } from './unpack-values.ts';
-
-/** A direction that stands in the file and cannot be one. */
-export const IMPOSSIBLE_DIRECTION = Number.POSITIVE_INFINITY;
+import { OUT_OF_RANGE, unpackValues } from './unpack-values.ts';
 
 /**
- * Sets directions of a pass as those the wind blows from, 0 <= d < 360, NaN where missing, IMPOSSIBLE_DIRECTION where
+ * Sets directions of a pass as those the wind blows from, 0 <= d < 360, NaN where missing, OUT_OF_RANGE where
  * wrong. Returns the sense they have in the file; where that or their unit is unknown, nothing is set.
  */
 export function readDirections(
@@ -20,11 +17,14 @@ export function readDirections(
   const factor = angleFactor(textAttribute(variable.attributes, 'units'));
   const sense = readDirectionSense(file.header, variable);
   if (factor === undefined || sense === 'unknown') return 'unknown';
-  const taking = { first, count: directionFrom.length, factor, plausibleHighest: 360 };
+  const taking = { first, count: directionFrom.length, factor, plausibleHighest: 360, outOfRange: OUT_OF_RANGE };
   const turn = sense === 'to' ? 180 : 0;
   unpackValues(file, variable, taking, (values, start) => turnDirections(values, turn, directionFrom, start));
   return sense;
 }
+
+/** Rounding in a file's scale factor may carry a full circle this far beyond itself, degrees. */
+const SLACK_DEG = 0.01;
 
 /** From here on a number rounds to 360 in 32 bits. */
 const LEAST_FULL_CIRCLE = 360 - 2 ** -16;
@@ -33,9 +33,9 @@ const LEAST_FULL_CIRCLE = 360 - 2 ** -16;
 function turnDirections(values: Float64Array, turn: number, directionFrom: Float32Array, start: number): void {
   for (let i = 0; i < values.length; i++) {
     const turned = values[i] + turn;
-    if (turned >= turn - 180 && turned <= turn + 360) {
+    if (turned >= turn - 180 - SLACK_DEG && turned <= turn + 360 + SLACK_DEG) {
       if (turned >= LEAST_FULL_CIRCLE) directionFrom[start + i] = Math.max(turned - 360, 0);
       else directionFrom[start + i] = turned < 0 ? turned + 360 : turned;
-    } else directionFrom[start + i] = Number.isNaN(turned) ? Number.NaN : IMPOSSIBLE_DIRECTION;
+    } else directionFrom[start + i] = Number.isNaN(turned) ? Number.NaN : OUT_OF_RANGE;
   }
 }

@@ -6,7 +6,7 @@ import { readDirections } from './read-directions.ts';
 import { type FlagField, MISSING_FLAGS, readFlagField } from './read-flag-field.ts';
 import { readSpeeds } from './read-speeds.ts';
 import { shareFactor } from './units-of-measure.ts';
-import { unpackValues } from './unpack-values.ts';
+import { OUT_OF_RANGE, unpackValues } from './unpack-values.ts';
 
 /** Sets the model's wind of a pass as background, where the file has one. */
 export function readBackground(file: CfFile, variables: SwathVariables, first: number, swath: Swath): void {
@@ -16,9 +16,15 @@ export function readBackground(file: CfFile, variables: SwathVariables, first: n
     const background = createBackground(swath.state.length);
     readSpeeds(file, modelSpeed, first, background.speedMs);
     if (modelDirection) readDirections(file, modelDirection, first, background.directionFrom);
+    clearOutOfRange(background.speedMs);
+    clearOutOfRange(background.directionFrom);
     swath.background = background;
     swath.notes.push(`${modelSpeed.name} is a model's wind, kept as background and never shown as seen.`);
   });
+}
+
+function clearOutOfRange(values: Float32Array): void {
+  for (let i = 0; i < values.length; i++) if (values[i] === OUT_OF_RANGE) values[i] = Number.NaN;
 }
 
 /** Sets the probability of ice of a pass, 0 to 1, where the file has one. */
@@ -28,7 +34,7 @@ export function readIceProbability(file: CfFile, variables: SwathVariables, firs
   attempt(file, () => {
     const probability = new Float32Array(swath.state.length);
     const factor = shareFactor(textAttribute(variable.attributes, 'units'));
-    const taking = { first, count: probability.length, factor, plausibleHighest: 1 };
+    const taking = { first, count: probability.length, factor, plausibleHighest: 1, outOfRange: Number.NaN };
     unpackValues(file, variable, taking, (values, start) => probability.set(values, start));
     swath.iceProbability = probability;
   });

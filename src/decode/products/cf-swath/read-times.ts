@@ -29,7 +29,13 @@ export function readTimes(
   const isForEachCell = own.length === dimensions.length;
   const count = own.reduce((product, { length }) => product * length, 1);
   const times = isForEachCell ? timeMs : new Float64Array(count);
-  const taking = { first: isForEachCell ? first : 0, count: times.length, factor: 1, plausibleHighest: Infinity };
+  const taking = {
+    first: isForEachCell ? first : 0,
+    count: times.length,
+    factor: 1,
+    plausibleHighest: Infinity,
+    outOfRange: Number.NaN,
+  };
   unpackValues(file, variable, taking, (values, start) => {
     for (let i = 0; i < values.length; i++) {
       const time = values[i] * unit.stepMs + unit.originMs;
@@ -80,7 +86,8 @@ function parseReference(text: string): number {
   );
   if (!date) return Number.NaN;
   const [year, month, day, hour = 0, minute = 0, second = 0] = date.slice(1, 7).map((part) => Number(part ?? 0));
-  if (month < 1 || month > 12 || day < 1 || day > 31 || hour > 24 || minute > 59) return Number.NaN;
+  // Date.UTC takes years before 100 for years of the twentieth century.
+  if (year < 1582 || month < 1 || month > 12 || day < 1 || day > 31 || hour > 24 || minute > 59) return Number.NaN;
   return Date.UTC(year, month - 1, day, hour, minute) + second * 1000 - parseZone(date[7]);
 }
 

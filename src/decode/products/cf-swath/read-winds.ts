@@ -3,8 +3,9 @@ import { NEVER_LOOKED, type Swath, WIND } from '../../../swath/swath.ts';
 import { flagBit } from '../../../wind/flags.ts';
 import { type CfFile, tellProblem } from './cf-file.ts';
 import type { WindVariables } from './find-variables.ts';
-import { IMPOSSIBLE_DIRECTION, readDirections } from './read-directions.ts';
+import { readDirections } from './read-directions.ts';
 import { MOST_SPEED_MS, readSpeeds } from './read-speeds.ts';
+import { OUT_OF_RANGE } from './unpack-values.ts';
 
 /**
  * Sets speed and direction of every looked-at cell of a pass that has a wind. A wind without a direction is still a
@@ -70,7 +71,7 @@ function markWinds(file: CfFile, swath: Swath): void {
       // NaN or impossible.
       if (!(directionFrom[cell] < 360)) {
         flags[cell] |= flagBit.directionUnknown;
-        if (directionFrom[cell] === IMPOSSIBLE_DIRECTION) {
+        if (directionFrom[cell] === OUT_OF_RANGE) {
           flags[cell] |= flagBit.outOfRange;
           impossibleDirections++;
         }
@@ -85,11 +86,12 @@ function markWinds(file: CfFile, swath: Swath): void {
     speedMs[cell] = Number.NaN;
     directionFrom[cell] = Number.NaN;
   }
-  tellImpossible(file, impossibleSpeeds, 'speeds', 'they count as no wind');
-  tellImpossible(file, impossibleDirections, 'directions', 'their winds are kept without one');
+  tellImpossible(file, impossibleSpeeds, 'Speeds', 'They count as no wind');
+  tellImpossible(file, impossibleDirections, 'Directions', 'Their winds are kept without one');
 }
 
 function tellImpossible(file: CfFile, count: number, word: string, consequence: string): void {
   if (count === 0) return;
-  tellProblem(file, new Problem('values-out-of-range', `${count} wind ${word} are not possible; ${consequence}.`));
+  const sentence = `${word} that cannot be, or are outside the file's own range: ${count}. ${consequence}.`;
+  tellProblem(file, new Problem('values-out-of-range', sentence));
 }

@@ -1,8 +1,7 @@
-import { Problem } from '../../../problems/problem.ts';
 import { type NetcdfValue, netcdfTypeOfArray, netcdfTypes } from '../../containers/netcdf-classic/netcdf-types.ts';
 import type { NetcdfVariable } from '../../containers/netcdf-classic/read-netcdf-header.ts';
 import { readNumbers } from '../../containers/netcdf-classic/read-variable.ts';
-import { type CfFile, numberAttribute, tellProblem } from './cf-file.ts';
+import { type CfFile, numberAttribute } from './cf-file.ts';
 
 /** How one variable's values are to be taken. */
 export interface Taking {
@@ -13,15 +12,19 @@ export interface Taking {
   factor: number;
   /** The most the quantity can be, in our unit; a stated range far beyond it is not believed. */
   plausibleHighest: number;
+  outOfRange: typeof OUT_OF_RANGE | typeof Number.NaN;
 }
+
+/** What stands where a value is outside the range that the file itself states, when the taker asks to know. */
+export const OUT_OF_RANGE = Number.POSITIVE_INFINITY;
 
 /** So many values at a time stay in the processor's nearest cache. */
 const CHUNK_LENGTH = 2048;
 
 /**
  * Hands on a variable's values chunk by chunk, unpacked and in our unit, missing ones as NaN: CF conventions 2.5.1 and
- * 8.1. Fill, missing value and valid range are in the packed type and compared before unpacking. Values outside the
- * stated range count as missing, which is told in the file's problems. The chunk is only lent: it is filled anew.
+ * 8.1. Fill, missing value and valid range are in the packed type and compared before unpacking. By CF a value outside
+ * the stated range is missing too; `outOfRange` says how it is marked. The chunk is only lent: it is filled anew.
  */
 export function unpackValues(
   file: CfFile,
@@ -30,12 +33,10 @@ export function unpackValues(
   take: (values: Float64Array, start: number) => void,
 ): void {
   const packing = readPacking(variable, taking);
-  let outside = 0;
   readInChunks(file, variable, taking.first, taking.count, (values, start) => {
-    outside += unpackChunk(values, packing);
+    unpackChunk(values, packing);
     take(values, start);
   });
-  if (outside > 0) tellOutside(file, variable, outside);
 }
 
 /** Hands on some of a variable's values chunk by chunk, as the file packs them. The chunk is only lent. */
@@ -62,9 +63,10 @@ interface Packing {
   missing: Interval[];
   /** What is added to negative values that are meant unsigned; 0 where none are. */
   signedGap: number;
+  outOfRange: number;
 }
 
-function readPacking(variable: NetcdfVariable, { factor, plausibleHighest }: Taking): Packing {
+function readPacking(variable: NetcdfVariable, { factor, plausibleHighest, outOfRange }: Taking): Packing {
   const unsigned = isUnsigned(variable);
   const scale = factor * (numberAttribute(variable.attributes, 'scale_factor')[0] ?? 1);
   const offset = factor * (numberAttribute(variable.attributes, 'add_offset')[0] ?? 0);
@@ -74,28 +76,23 @@ function readPacking(variable: NetcdfVariable, { factor, plausibleHighest }: Tak
     range: statedRange(variable, unsigned, (packed) => packed * scale + offset, plausibleHighest),
     missing: missingIntervals(variable, unsigned),
     signedGap: unsigned ? 2 ** (8 * netcdfTypes[variable.type].byteLength) : 0,
+    outOfRange,
   };
 }
 
-/** Unpacks in place; returns how many values were outside the stated range. */
-function unpackChunk(values: Float64Array, packing: Packing): number {
-  const { scale, offset, signedGap } = packing;
+function unpackChunk(values: Float64Array, packing: Packing): void {
+  const { scale, offset, signedGap, outOfRange } = packing;
   if (signedGap > 0) for (let i = 0; i < values.length; i++) if (values[i] < 0) values[i] += signedGap;
   // Few variables have more than one missing value: those are taken out beforehand, to keep the loop below tight.
   for (const interval of packing.missing.slice(1)) eraseInterval(values, interval);
   const { lowest, highest } = packing.range;
   const { lowest: lowestFill, highest: highestFill } = packing.missing[0];
-  let outside = 0;
   for (let i = 0; i < values.length; i++) {
     const packed = values[i];
     if (packed >= lowestFill && packed <= highestFill) values[i] = Number.NaN;
     else if (packed >= lowest && packed <= highest) values[i] = packed * scale + offset;
-    else {
-      if (!Number.isNaN(packed)) outside++;
-      values[i] = Number.NaN;
-    }
+    else values[i] = Number.isNaN(packed) ? packed : outOfRange;
   }
-  return outside;
 }
 
 /** Both ends belong to it. */
@@ -171,9 +168,4 @@ function eraseInterval(values: Float64Array, interval: Interval): void {
   for (let i = 0; i < values.length; i++) {
     if (values[i] >= interval.lowest && values[i] <= interval.highest) values[i] = Number.NaN;
   }
-}
-
-function tellOutside(file: CfFile, variable: NetcdfVariable, count: number): void {
-  const sentence = `${variable.name} leaves the range that the file itself states in ${count} places; taken as missing there.`;
-  tellProblem(file, new Problem('values-out-of-range', sentence, { part: `variable ${variable.name}` }));
 }
