@@ -23,6 +23,7 @@ export async function buildIfStale(projectFolder: string, say: (line: string) =>
   say(`Building the window's files, since ${staleness} …`);
   const build = spawn(process.execPath, [join(projectFolder, '.config', 'build.ts')], {
     cwd: projectFolder,
+    env: { ...process.env, NO_COLOR: '1' },
     stdio: ['ignore', 'pipe', 'pipe'],
   });
   let told = '';

@@ -23,12 +23,23 @@ afterEach(() => rmSync(folder, { recursive: true }));
 const inFolder = (name: string) => join(folder, name);
 
 /** Runs a command at a terminal that keeps what is written. */
-async function run(...words: string[]): Promise<{ code: number; out: string; told: string }> {
+const run = (...words: string[]) => runAt(() => {}, ...words);
+
+/** The same, for a user who sees each piece of output and may interrupt. */
+async function runAt(see: (text: string, interrupt: () => void) => void, ...words: string[]) {
   const written = { out: '', told: '' };
+  let interrupt = () => {};
   const terminal: Terminal = {
-    stdout: { write: (text) => (written.out += text) },
+    stdout: {
+      write: (text) => {
+        written.out += text;
+        see(text, interrupt);
+      },
+    },
     stderr: { write: (text) => (written.told += text) },
-    once: () => {},
+    once: (_event, listener) => {
+      interrupt = listener;
+    },
     removeListener: () => {},
   };
   const code = await runCommand(words, terminal);
@@ -72,6 +83,20 @@ test('loads a folder, tells each fate, and says so the second time', async () =>
   expect(first.told).toMatch(/\d+ % {2}file \d of \d: wind\.nc/);
   const second = await run('load', inFolder('wind.nc'), ...archive);
   expect([second.code, second.out]).toEqual([0, 'wind.nc: already there as pass 2\n']);
+});
+
+test('stops loading in order when the user interrupts, and ends with 1', async () => {
+  for (let index = 0; index < 40; index++) {
+    // A byte behind the data makes each file another one.
+    writeFileSync(inFolder(`${index}.nc`), Buffer.concat([buildCfFile(), Buffer.of(index)]));
+  }
+  const interruptAtFirst = (text: string, interrupt: () => void) => text.includes('loaded') && interrupt();
+  const { code, out, told } = await runAt(interruptAtFirst, 'load', folder, ...archive);
+  expect(code).toBe(1);
+  expect(told).toContain('Loading was stopped');
+  const loaded = out.match(/: loaded/g)?.length ?? 0;
+  expect(loaded).toBeLessThan(40);
+  expect(JSON.parse((await run('passes', ...archive, '--json')).out)).toHaveLength(loaded);
 });
 
 test('lists passes with times, counts and the strongest wind, and removes them by number', async () => {
