@@ -11,12 +11,17 @@ export async function runLoad({ given, archivePath }: Words, terminal: Terminal)
     terminal.stderr.write('Name the files or folders to load: crosstrack load FILE|FOLDER... [--archive PATH]\n');
     return 2;
   }
-  const fates = await atDesk(archivePath, (desk) => loadAll(desk, given, terminal));
+  const { fates, wasStopped } = await atDesk(archivePath, (desk) => loadAll(desk, given, terminal));
   const isWhole = fates.every(({ fate }) => fate === 'loaded' || fate === 'already there');
-  return isWhole && fates.length > 0 ? 0 : 1;
+  return isWhole && fates.length > 0 && !wasStopped ? 0 : 1;
 }
 
-function loadAll(desk: Desk, paths: string[], terminal: Terminal): Promise<FileFate[]> {
+interface Outcome {
+  fates: FileFate[];
+  wasStopped: boolean;
+}
+
+function loadAll(desk: Desk, paths: string[], terminal: Terminal): Promise<Outcome> {
   return new Promise((resolve, reject) => {
     const fates: FileFate[] = [];
     const stopLoading = () => desk.perform('stopTask', { taskId }).catch(reject);
@@ -30,11 +35,11 @@ function loadAll(desk: Desk, paths: string[], terminal: Terminal): Promise<FileF
       if (line.kind !== 'load ended') return;
       if (line.wasStopped) terminal.stderr.write('Loading was stopped; what is listed above is stored.\n');
       terminal.removeListener('SIGINT', stopLoading);
-      resolve(fates);
+      resolve({ fates, wasStopped: line.wasStopped });
     });
-    terminal.once('SIGINT', stopLoading);
     desk.perform('loadPaths', { paths }).then((answer) => {
       taskId = answer.taskId;
+      terminal.once('SIGINT', stopLoading);
     }, reject);
   });
 }
