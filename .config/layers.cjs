@@ -156,7 +156,7 @@ module.exports = {
     },
     {
       name: 'renderer/main',
-      at: ['renderer/main.ts', 'renderer/index.html', 'renderer/main.css'],
+      at: ['renderer/main.ts', 'renderer/main', 'renderer/index.html', 'renderer/main.css'],
       runs: 'browser',
       layers: [
         'contract',
