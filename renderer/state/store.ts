@@ -39,3 +39,20 @@ export function createStore<State extends object>(first: State): Store<State> {
     },
   };
 }
+
+/** Acts on a value read from a store whenever it has become another (as JSON). Returns its stop. */
+export function follow<State extends object, Value>(
+  store: Store<State>,
+  parts: readonly (keyof State)[],
+  read: (state: State) => Value,
+  act: (value: Value) => void,
+): () => void {
+  let last = JSON.stringify(read(store.get()));
+  return store.listen(parts, (state) => {
+    const value = read(state);
+    const text = JSON.stringify(value);
+    if (text === last) return;
+    last = text;
+    act(value);
+  });
+}

@@ -1,5 +1,5 @@
 import type { PassSummary } from '../../../src/contract/values.ts';
-import { formatAge, formatClock, formatDate } from '../../../src/wind/words.ts';
+import { formatAge, formatClock, formatDate, formatSpeed } from '../../../src/wind/words.ts';
 
 /** The words of what the chart must say about itself. */
 export const noticeWords = {
@@ -17,4 +17,10 @@ export const noticeWords = {
 export function describeOldPasses(newest: Pick<PassSummary, 'endMs'>, nowMs: number): string {
   const moment = `${formatDate(newest.endMs)} ${formatClock(newest.endMs)} UTC`;
   return `No pass lies in the time window. The newest ended ${moment}, ${formatAge(newest.endMs, nowMs)}.`;
+}
+
+/** What the chart draws, in words: 'Chart: 312 winds drawn in view, strongest 63 kt'. */
+export function describeDrawn(winds: number, strongestMs: number | null, unit: 'knots' | 'metresPerSecond'): string {
+  if (winds === 0 || strongestMs === null) return 'Chart: no wind drawn in view';
+  return `Chart: ${winds} winds drawn in view, strongest ${formatSpeed(strongestMs, unit)}`;
 }
