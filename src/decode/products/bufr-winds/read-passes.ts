@@ -1,25 +1,24 @@
 import { Problem } from '../../../problems/problem.ts';
-import { type Solutions, type Swath, type Viewing, WIND } from '../../../swath/swath.ts';
+import { type Swath, type Viewing, WIND } from '../../../swath/swath.ts';
 import { openMessage } from '../../containers/bufr/open-message.ts';
 import { arrangePasses, isPlaced } from './arrange-passes.ts';
 import { type CellTable, createCellTable, fillCells } from './cell-table.ts';
 import { chooseWinds } from './choose-winds.ts';
+import { dropEmptyParts } from './drop-empty-parts.ts';
 import { findFlagTable } from './flag-tables.ts';
 import { readFlags } from './read-flags.ts';
 import { readLikelihoods } from './read-likelihoods.ts';
 import type { SurveyedMessage } from './survey-message.ts';
 import { takeCells } from './take-cells.ts';
 
-/**
- * Reads messages of one kind into passes. Cells that are damaged or cannot be placed are counted in `problems`.
- */
+/** Reads messages of one kind into passes. Cells that are damaged or cannot be placed are counted in `problems`. */
 export function readPasses(bytes: Uint8Array, messages: readonly SurveyedMessage[], problems: Problem[]): Swath[] {
   const { viewing, flagDescriptor } = messages[0];
   const table = readTable(bytes, messages);
   const { cells } = table;
   if (table.outside.size > 0) problems.push(describeOutside(table.outside));
   const notes: string[] = [];
-  if (cells.solutions && !readLikelihoods(cells.solutions, viewing === 'pencil-beam')) {
+  if (cells.solutions && !readLikelihoods(cells.solutions, viewing !== 'fan-beam')) {
     notes.push('The likelihoods of this file are no probabilities of the solutions, so none are given.');
   }
   const choices = chooseWinds(table);
@@ -44,12 +43,13 @@ export function readPasses(bytes: Uint8Array, messages: readonly SurveyedMessage
 }
 
 function readTable(bytes: Uint8Array, messages: readonly SurveyedMessage[]): CellTable {
-  const sizes = messages.map(({ size }) => size);
-  const table = createCellTable({
-    cells: sizes.reduce((sum, { cells }) => sum + cells, 0),
-    looks: Math.max(...sizes.map(({ looks }) => looks)),
-    solutions: Math.max(...sizes.map(({ solutions }) => solutions)),
-  });
+  const total = { cells: 0, looks: 0, solutions: 0 };
+  for (const { size } of messages) {
+    total.cells += size.cells;
+    total.looks = Math.max(total.looks, size.looks);
+    total.solutions = Math.max(total.solutions, size.solutions);
+  }
+  const table = createCellTable(total);
   let firstCell = 0;
   for (const { message, size, open } of messages) {
     const { reader, blocks } = open ?? openMessage(bytes, message);
@@ -63,37 +63,6 @@ function describeOutside(outside: ReadonlyMap<string, number>): Problem {
   const list = [...outside].map(([kind, count]) => `${kind} (${count})`).join(', ');
   const message = `Values outside their physical range are left out and their cells marked: ${list}.`;
   return new Problem('values-out-of-range', message);
-}
-
-/** Parts that hold no value at all are no parts of the swath. */
-function dropEmptyParts(cells: Swath): void {
-  const isEmpty = (values: Float32Array) => values.every(Number.isNaN);
-  if (cells.solutions) cells.solutions = dropEmptySlots(cells.solutions);
-  if (cells.beams && isEmpty(cells.beams.backscatterDb)) cells.beams = null;
-  if (cells.background && isEmpty(cells.background.speedMs)) cells.background = null;
-  if (cells.iceProbability && isEmpty(cells.iceProbability)) cells.iceProbability = null;
-}
-
-/** Solutions without the last slots that no cell uses; null where none is used. */
-function dropEmptySlots(solutions: Solutions): Solutions | null {
-  const { slots, speedMs } = solutions;
-  let used = slots;
-  const isUsed = (slot: number) => {
-    for (let i = slot; i < speedMs.length; i += slots) if (!Number.isNaN(speedMs[i])) return true;
-    return false;
-  };
-  while (used > 0 && !isUsed(used - 1)) used--;
-  if (used === slots) return solutions;
-  const keep = (values: Float32Array) => values.filter((_, i) => i % slots < used);
-  return used === 0
-    ? null
-    : {
-        slots: used,
-        speedMs: keep(speedMs),
-        directionFrom: keep(solutions.directionFrom),
-        probability: keep(solutions.probability),
-        fitDistance: keep(solutions.fitDistance),
-      };
 }
 
 /** Cells without a place cannot be drawn or searched; that they exist, and how strong their wind is, must not be lost. */
@@ -112,11 +81,11 @@ function tellUnplaced(table: CellTable, problems: Problem[]): void {
   problems.push(new Problem('damaged', message));
 }
 
-function describePass(swath: Swath, viewing: Viewing, table: CellTable, firstCell: number): void {
+function describePass(swath: Swath, viewing: Viewing | null, table: CellTable, firstCell: number): void {
   const platformCode = table.platformCode[firstCell];
   swath.viewing = viewing;
   // The sequences of fan-beam winds are of C-band radars, those of pencil beams of Ku-band ones (FM 94 table D, 3 12).
-  swath.band = viewing === 'fan-beam' ? 'C' : 'Ku';
+  swath.band = viewing && ({ 'fan-beam': 'C', 'pencil-beam': 'Ku' } as const)[viewing];
   swath.platformCode = Number.isNaN(platformCode) ? null : platformCode;
   swath.cellSizeM = table.cellSizeM[firstCell];
   // FM 94 table B, class 11: wind directions are those from which the wind blows.

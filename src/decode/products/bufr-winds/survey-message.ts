@@ -9,7 +9,8 @@ import type { TableSize } from './cell-table.ts';
 /** What a message holds, found before anything is read, so that tables can be made in one piece. */
 export interface SurveyedMessage {
   message: FoundMessage;
-  viewing: Viewing;
+  /** Null where the elements tell neither kind. */
+  viewing: Viewing | null;
   /** The element of its flag word; 0 where it has none. */
   flagDescriptor: number;
   size: TableSize;
@@ -62,10 +63,12 @@ function refuseImpossible({ cells, looks, solutions }: TableSize, message: Found
   }
 }
 
-/** Pencil beams have a look angle (0 02 112) or a sensor indicator (0 02 048); fan beams an antenna beam azimuth. */
-function tellViewing({ blocks }: OpenMessage): Viewing {
-  const isPencil = blocks[0]?.columns.some(
-    ({ element }) => element.descriptor === 2048 || element.descriptor === 21109,
-  );
-  return isPencil ? 'pencil-beam' : 'fan-beam';
+/**
+ * Tells the kind by elements that only one kind has (FM 94 table D, 3 12): pencil beams a sensor indicator, 0 02 048, fan
+ * beams an antenna beam azimuth, 0 02 134, or the flag word 0 21 155.
+ */
+function tellViewing({ blocks }: OpenMessage): Viewing | null {
+  const elements = new Set(blocks[0]?.columns.map(({ element }) => element.descriptor));
+  if (elements.has(2048)) return 'pencil-beam';
+  return elements.has(2134) || elements.has(21155) ? 'fan-beam' : null;
 }
