@@ -84,7 +84,7 @@ function writePlain(writer: BitWriter, plan: readonly PlanStep[], subset: readon
   refuseUnlessAll(count, subset);
 }
 
-/** FM 94 regulation 94.6.3: for each element the smallest value, 6 bits for the width of increments, the increments. */
+/** FM 94, data compression: for each element the smallest value, 6 bits for the width of increments, the increments. */
 function writeCompressed(
   writer: BitWriter,
   plan: readonly PlanStep[],

@@ -44,7 +44,7 @@ export function layOutData(
   return blocks;
 }
 
-/** FM 94 regulation 94.6.3: the smallest value, 6 bits for the width of the increments, an increment for each subset. */
+/** FM 94, data compression: the smallest value, 6 bits for the width of the increments, an increment for each subset. */
 const INCREMENT_WIDTH_BITS = 6;
 
 function layOutCompressed(reader: BitReader, plan: readonly PlanStep[], subsetCount: number): DataBlock {
@@ -54,7 +54,7 @@ function layOutCompressed(reader: BitReader, plan: readonly PlanStep[], subsetCo
     const { position } = reader;
     const base = isText ? 0 : reader.read(element.widthBits);
     if (isText) reader.skip(element.widthBits);
-    // The width of text increments counts octets (FM 94 regulation 94.6.3, note on character data).
+    // The width of text increments counts octets (FM 94, data compression).
     const widthBits = reader.read(INCREMENT_WIDTH_BITS) * (isText ? 8 : 1);
     if (widthBits === 0) {
       columns.add({ element, position, widthBits: element.widthBits, strideBits: 0, base: 0 });

@@ -108,6 +108,11 @@ function planReplication(descriptors: readonly PlacedDescriptor[], index: number
     const name = formatDescriptor(descriptor);
     throw new Problem('damaged', `Replication ${name} repeats more descriptors than follow it.`, { byte });
   }
+  if (isDelayed && state.addedWidth !== 0) {
+    // The manual does not say whether 2 01 widens the count too, and programs differ.
+    const message = 'A delayed replication under operator 2 01 (change data width) can be read in two ways.';
+    throw new Problem('unsupported-operator', message, { byte });
+  }
   const counter = isDelayed ? planCounter(descriptors[index + 1]) : null;
   const body = descriptors.slice(first, first + x);
   const { addedWidth, addedScale } = state;
@@ -120,7 +125,7 @@ function planReplication(descriptors: readonly PlacedDescriptor[], index: number
   return { times: isDelayed ? null : y, counter, steps };
 }
 
-/** The count follows its replication and is not one of the X descriptors repeated (FM 94 regulation 94.5.4.2). */
+/** The count follows its replication and is not one of the X descriptors repeated (FM 94, delayed replication). */
 function planCounter(placed: PlacedDescriptor): ElementStep {
   const { descriptor, byte } = placed;
   if (descriptor !== 31000 && descriptor !== 31001 && descriptor !== 31002) {

@@ -113,8 +113,8 @@ function createUnpacker(column: Column, range?: PhysicalRange): (field: number, 
 }
 
 /**
- * The fields that mean missing: all ones, be it of the field or of the whole value (FM 94 regulations 94.1.5 and
- * 94.6.3); the second is never the higher one. No field does where an element cannot be missing.
+ * The fields that mean missing: all ones, be it of the field or of the whole value (FM 94 regulation 94.1.5
+ * and data compression); the second is never the higher one. No field does where an element cannot be missing.
  */
 function missingFields({ element, widthBits, base }: Column): [number, number] {
   if (!element.canBeMissing) return [-1, Number.POSITIVE_INFINITY];

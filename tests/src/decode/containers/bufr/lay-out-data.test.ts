@@ -25,7 +25,7 @@ function binary(value: number, width: number): string {
   return value.toString(2).padStart(width, '0');
 }
 
-// How compressed data are packed: WMO-No. 306, FM 94 regulation 94.6.3, worked by hand.
+// How compressed data are packed: WMO-No. 306, FM 94, data compression, worked by hand.
 test('adds increments to the smallest value; an increment of all ones is missing', () => {
   expect(values([11012], `${binary(100, 12)} 000011 000 101 111`, 3, true)).toEqual([[10], [10.5], [null]]);
 });

@@ -31,12 +31,10 @@ test('applies width and scale operators to quantities until they are cancelled',
 
 // FM 94 table C, notes: not for code tables, flag tables and text.
 test('leaves codes, flags and text as they are under an operator', () => {
-  expect(draw(planDescriptors([201140, 202130, 2104, 21155, 1015, 31001], 0))).toBe(
-    '2104(4,0) 21155(24,0) 1015(160,0) 31001(20,2)',
-  );
+  expect(draw(planDescriptors([201140, 202130, 2104, 21155, 1015], 0))).toBe('2104(4,0) 21155(24,0) 1015(160,0)');
 });
 
-// FM 94 regulation 94.5.4.2: the count is not one of the descriptors repeated.
+// FM 94, delayed replication: the count is not one of the descriptors repeated.
 test('does not count the element that says how often among the descriptors repeated', () => {
   expect(draw(planDescriptors([102000, 31001, 11012, 11011, 4006], 0))).toBe(
     '[31001: 11012(12,1) 11011(9,0)] 4006(6,0)',
@@ -78,6 +76,11 @@ test('refuses widths that no number has, and lists that open into thousands of e
 test('repeats blocks that leave an operator in force only if it makes no difference', () => {
   expect(draw(planDescriptors([102002, 201130, 11012, 201000], 0))).toBe('[2 11012(14,1)]');
   expect(refusal([102002, 11012, 201130]).code).toBe('unsupported-operator');
+});
+
+test('refuses a delayed block under a width operator, which programs read in two ways', () => {
+  expect(refusal([201132, 101000, 31001, 11012, 201000]).code).toBe('unsupported-operator');
+  expect(draw(planDescriptors([202129, 101000, 31001, 11012], 0))).toBe('[31001: 11012(12,2)]');
 });
 
 test('says whether all ones mean missing: not for 1-bit elements, not for class 31', () => {
