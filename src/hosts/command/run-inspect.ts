@@ -34,12 +34,17 @@ function describePass(pass: InspectedPass, number: number): string[] {
     `  Pass ${number}: ${pass.start} to ${pass.end}, ${pass.rows} rows of ${pass.columns}`,
     `    ${pass.cells} cells looked at, ${pass.winds} with a wind, ${pass.windsOfGale} of gale force or more`,
     `    ${describeStrongest(pass)}`,
-    `    ${pass.beams} radar looks and up to ${pass.solutionsMax} solutions in a cell; ` +
-      `the chosen wind is not the first solution in ${pass.windsNotFirstSolution} cells`,
+    `    ${describeSolutions(pass)}`,
     `    Flags: ${flags.length > 0 ? flags.join(', ') : 'none set'}`,
     ...(pass.directionStated ? [] : ['    The file does not say which way its directions point.']),
     ...pass.notes.map((note) => `    Note: ${note}`),
   ];
+}
+
+function describeSolutions({ beams, solutionsMax, windsNotFirstSolution }: InspectedPass): string {
+  const looks = beams > 0 ? `${beams} radar looks in a cell` : 'No radar looks';
+  if (solutionsMax === 0) return `${looks}; no solutions beside the wind itself.`;
+  return `${looks}; up to ${solutionsMax} solutions, of which not the first was chosen in ${windsNotFirstSolution} cells.`;
 }
 
 function describeStrongest({ maxSpeedMs, maxLon, maxLat, maxTime }: InspectedPass): string {
