@@ -6,7 +6,7 @@ import { readDirections } from './read-directions.ts';
 import { type FlagField, MISSING_FLAGS, readFlagField } from './read-flag-field.ts';
 import { readSpeeds } from './read-speeds.ts';
 import { shareFactor } from './units-of-measure.ts';
-import { OUT_OF_RANGE, unpackValues } from './unpack-values.ts';
+import { unpackValues } from './unpack-values.ts';
 
 /** Sets the model's wind of a pass as background, where the file has one. */
 export function readBackground(file: CfFile, variables: SwathVariables, first: number, swath: Swath): void {
@@ -14,17 +14,11 @@ export function readBackground(file: CfFile, variables: SwathVariables, first: n
   if (!modelSpeed) return;
   attempt(file, () => {
     const background = createBackground(swath.state.length);
-    readSpeeds(file, modelSpeed, first, background.speedMs);
-    if (modelDirection) readDirections(file, modelDirection, first, background.directionFrom);
-    clearOutOfRange(background.speedMs);
-    clearOutOfRange(background.directionFrom);
+    readSpeeds(file, modelSpeed, first, background.speedMs, Number.NaN);
+    if (modelDirection) readDirections(file, modelDirection, first, background.directionFrom, Number.NaN);
     swath.background = background;
     swath.notes.push(`${modelSpeed.name} is a model's wind, kept as background and never shown as seen.`);
   });
-}
-
-function clearOutOfRange(values: Float32Array): void {
-  for (let i = 0; i < values.length; i++) if (values[i] === OUT_OF_RANGE) values[i] = Number.NaN;
 }
 
 /** Sets the probability of ice of a pass, 0 to 1, where the file has one. */

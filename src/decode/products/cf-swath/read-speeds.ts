@@ -7,8 +7,17 @@ import { OUT_OF_RANGE, unpackValues } from './unpack-values.ts';
 /** Speeds beyond this, m/s, are no wind: above any that was measured at sea (no source). */
 export const MOST_SPEED_MS = 100;
 
-/** Sets speeds of a pass in m/s, NaN where missing, OUT_OF_RANGE where outside the file's own range. A unit we do not know is a Problem: a guess would be a wrong wind. */
-export function readSpeeds(file: CfFile, variable: NetcdfVariable, first: number, speedMs: Float32Array): void {
+/**
+ * Sets speeds of a pass in m/s, NaN where missing, `outOfRange` where outside the file's own range. A unit we do not
+ * know is a Problem: a guess would be a wrong wind.
+ */
+export function readSpeeds(
+  file: CfFile,
+  variable: NetcdfVariable,
+  first: number,
+  speedMs: Float32Array,
+  outOfRange = OUT_OF_RANGE,
+): void {
   const unit = textAttribute(variable.attributes, 'units');
   const factor = speedFactor(unit);
   if (factor === undefined) {
@@ -18,6 +27,6 @@ export function readSpeeds(file: CfFile, variable: NetcdfVariable, first: number
       part: `variable ${variable.name}`,
     });
   }
-  const taking = { first, count: speedMs.length, factor, plausibleHighest: MOST_SPEED_MS, outOfRange: OUT_OF_RANGE };
+  const taking = { first, count: speedMs.length, factor, plausibleHighest: MOST_SPEED_MS, outOfRange };
   unpackValues(file, variable, taking, (values, start) => speedMs.set(values, start));
 }

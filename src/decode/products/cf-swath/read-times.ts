@@ -26,7 +26,8 @@ export function readTimes(
       place,
     );
   }
-  const isForEachCell = own.length === dimensions.length;
+  const isForEachCell =
+    own.length === dimensions.length && own.every((dimension, axis) => dimension === dimensions[axis]);
   const count = own.reduce((product, { length }) => product * length, 1);
   const times = isForEachCell ? timeMs : new Float64Array(count);
   const taking = {

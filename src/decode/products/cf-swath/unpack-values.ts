@@ -12,10 +12,11 @@ export interface Taking {
   factor: number;
   /** The most the quantity can be, in our unit; a stated range far beyond it is not believed. */
   plausibleHighest: number;
-  outOfRange: typeof OUT_OF_RANGE | typeof Number.NaN;
+  /** What to put where a value is outside the range that the file states: OUT_OF_RANGE, or NaN not to tell it from missing. */
+  outOfRange: number;
 }
 
-/** What stands where a value is outside the range that the file itself states, when the taker asks to know. */
+/** A value outside the range that the file itself states, for a taker that wants to know. */
 export const OUT_OF_RANGE = Number.POSITIVE_INFINITY;
 
 /** So many values at a time stay in the processor's nearest cache. */
