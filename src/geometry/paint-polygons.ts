@@ -6,15 +6,20 @@ export type Edges = Float64Array;
 
 /** The edges of rings as they stand, cut at the date line where they cross it. A ring need not repeat its first position. */
 export function edgesOfRings(rings: readonly (readonly (readonly number[])[])[]): Edges {
-  const edges: number[] = [];
+  const edges = new Float64Array(4 * rings.reduce((positions, ring) => positions + ring.length, 0));
+  let filled = 0;
   for (const ring of rings) {
     for (let i = 0; i < ring.length; i++) {
       const [lon1, lat1] = ring[i];
-      const [lon2, lat2] = ring[(i + 1) % ring.length];
-      if (lon1 !== lon2 || lat1 !== lat2) edges.push(lon1, lat1, lon2, lat2);
+      const [lon2, lat2] = ring[i + 1 < ring.length ? i + 1 : 0];
+      if (lon1 === lon2 && lat1 === lat2) continue;
+      edges[filled++] = lon1;
+      edges[filled++] = lat1;
+      edges[filled++] = lon2;
+      edges[filled++] = lat2;
     }
   }
-  return Float64Array.from(edges);
+  return edges.subarray(0, filled);
 }
 
 /** A ring whose longitudes run on past 180 instead of jumping, each step the short way round. */

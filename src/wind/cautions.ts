@@ -9,6 +9,7 @@ export const standingCautions = [
   'Rain can spoil a wind, in the Ku band above all; a wind without a rain flag may never have been checked for rain.',
   'A direction can be wrong by about 180 degrees, most of all in light wind and near fronts and centres.',
   'Near coasts and ice winds may be wrong or missing.',
+  'The responsible forecaster, official warnings and local rules come first; nothing here weakens a warning.',
   'Not for navigation: the map is no chart.',
 ] as const;
 

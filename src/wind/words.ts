@@ -1,4 +1,4 @@
-import { normaliseDegrees, normaliseLongitude } from './units.ts';
+import { normaliseDegrees, normaliseLongitude, toWholeKnots } from './units.ts';
 
 /** A position in whole minutes with hemisphere letters: '52°31′S 78°37′E'. */
 export function formatPosition(lon: number, lat: number): string {
@@ -9,6 +9,11 @@ function formatAngle(degrees: number, positive: string, negative: string, width:
   const minutes = Math.round(Math.abs(degrees) * 60);
   const whole = String(Math.floor(minutes / 60)).padStart(width, '0');
   return `${whole}°${String(minutes % 60).padStart(2, '0')}′${degrees < 0 && minutes > 0 ? negative : positive}`;
+}
+
+/** A speed in the user's unit: whole knots, '54 kt', or metres per second in tenths, '27.9 m/s'. */
+export function formatSpeed(speedMs: number, unit: 'knots' | 'metresPerSecond'): string {
+  return unit === 'knots' ? `${toWholeKnots(speedMs)} kt` : `${speedMs.toFixed(1)} m/s`;
 }
 
 /** A direction as three digits, north as 360 as coded reports say it: '268°'. */
