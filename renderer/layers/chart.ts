@@ -148,6 +148,9 @@ export function createChart(container: HTMLElement, options: ChartOptions): Char
   });
   map.on('moveend', tellMoved);
   map.on('resize', tellMoved);
+  map.on('sourcedata', ({ sourceId }) => {
+    if (sourceId?.startsWith('land-')) areWordsStale = true;
+  });
   map.on('idle', placeWords);
   map.on('click', (event) => pickAt(event.point.x, event.point.y));
   map.getCanvas().addEventListener('keydown', onKey);

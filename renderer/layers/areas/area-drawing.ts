@@ -75,11 +75,7 @@ export function drawArea(map: MapLibreMap, outline: AreaOutline, note: HTMLEleme
       draw();
     }
 
-    const listenings = [
-      map.on('click', onClick),
-      map.on('mousemove', onPointer),
-      map.on('dblclick', onDoubleClick),
-    ];
+    const listenings = [map.on('click', onClick), map.on('mousemove', onPointer), map.on('dblclick', onDoubleClick)];
     canvas.addEventListener('keydown', onKey, true);
     map.doubleClickZoom.disable();
     canvas.style.cursor = 'crosshair';

@@ -13,10 +13,13 @@ const SQUARE_PX = 16;
 /** Half the size of the water that must be unseen about a place. */
 const HALF_WIDTH_PX = 80;
 const HALF_HEIGHT_PX = 32;
+/** Places of the lattice round the world at zoom 0, and the height of its rows as a share of its width. */
+const LATTICE_PER_WORLD = 3;
+const LATTICE_HEIGHT = 0.7;
 
 /**
- * Places in a view with room for words on water that nobody looked at. They lie on a lattice fixed to the earth, 256 to
- * 512 CSS pixels wide and half as high, so a pan moves no word.
+ * Places in a view with room for words on water that nobody looked at. They lie on a lattice fixed to the earth, 171 to
+ * 341 CSS pixels wide, so a pan moves no word.
  */
 export function findUnseenPlaces(cells: Cells, kinds: Uint8Array, view: View): Place[] {
   const seen = markSeen(cells, kinds, view);
@@ -51,7 +54,9 @@ function markSeen(cells: Cells, kinds: Uint8Array, view: View): SeenGrid {
 function markAbout({ columns, rows, seen }: SeenGrid, xPx: number, yPx: number, radiusPx: number): void {
   const [left, right] = squaresAbout(xPx, radiusPx, columns);
   const [top, bottom] = squaresAbout(yPx, radiusPx, rows);
-  for (let row = top; row <= bottom; row++) seen.fill(1, row * columns + left, row * columns + right + 1);
+  for (let row = top; row <= bottom; row++) {
+    for (let column = left; column <= right; column++) seen[row * columns + column] = 1;
+  }
 }
 
 function isUnseenAbout({ columns, rows, seen }: SeenGrid, xPx: number, yPx: number): boolean {
@@ -82,13 +87,14 @@ function footprintPx(cells: Cells, cell: number, view: View): number {
 }
 
 function latticeIn(view: View): Place[] {
-  const step = 2 ** -(Math.floor(view.zoom) + 1);
+  const step = 1 / (LATTICE_PER_WORLD * 2 ** Math.floor(view.zoom));
+  const rowStep = step * LATTICE_HEIGHT;
   const reach = reachOf(view);
   const places: Place[] = [];
-  for (let row = Math.ceil((reach.north * 2) / step); (row * step) / 2 <= reach.south; row++) {
+  for (let row = Math.ceil(reach.north / rowStep); row * rowStep <= reach.south; row++) {
     const shift = row % 2 === 0 ? 0 : step / 2;
     for (let column = Math.ceil((reach.west - shift) / step); column * step + shift <= reach.east; column++) {
-      const place = { x: column * step + shift, y: (row * step) / 2 };
+      const place = { x: column * step + shift, y: row * rowStep };
       if (isWellInside(view, place)) places.push(place);
     }
   }

@@ -5,6 +5,7 @@ precision highp float;
 // they draw apart to twice their step while others fade in between, so they never jump.
 const float LINE_WIDTH = 1.0;
 const float LINE_STRENGTH = 0.55;
+const float EDGE_STRENGTH = 0.7;
 const float DOT_RADIUS = 0.85;
 
 uniform sampler2D u_seen;
@@ -42,10 +43,20 @@ float stippleCover(vec2 earthPx) {
   return odd == vec2(0.0) ? cover : cover * u_between;
 }
 
+// A fine line where sight ends: strongest where a pixel and its neighbours are half seen.
+float edgeCover(ivec2 at, float seen) {
+  ivec2 last = textureSize(u_seen, 0) - 1;
+  float around = texelFetch(u_seen, min(at + ivec2(1, 0), last), 0).r + texelFetch(u_seen, max(at - ivec2(1, 0), 0), 0).r +
+                 texelFetch(u_seen, min(at + ivec2(0, 1), last), 0).r + texelFetch(u_seen, max(at - ivec2(0, 1), 0), 0).r;
+  return 1.0 - abs(2.0 * (around + 2.0 * seen) / 6.0 - 1.0);
+}
+
 void main() {
-  vec2 seen = texelFetch(u_seen, ivec2(gl_FragCoord.xy), 0).rg;
+  ivec2 at = ivec2(gl_FragCoord.xy);
+  vec2 seen = texelFetch(u_seen, at, 0).rg;
   vec2 earthPx = u_toEarth * v_px;
   vec3 unseen = mix(u_unseen, u_hatch, LINE_STRENGTH * hatchCover(earthPx));
   vec3 sea = mix(u_sea, u_stipple, seen.g * stippleCover(earthPx));
-  o_colour = vec4(mix(unseen, sea, seen.r), 1.0);
+  vec3 water = mix(unseen, sea, seen.r);
+  o_colour = vec4(mix(water, u_hatch, EDGE_STRENGTH * edgeCover(at, seen.r)), 1.0);
 }
