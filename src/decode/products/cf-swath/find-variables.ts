@@ -89,9 +89,9 @@ function isWind(variable: NetcdfVariable): boolean {
 
 /** A model's value says so in its name, or carries an attribute about the model or background it came from. */
 function isModel(variable: NetcdfVariable): boolean {
-  if (/\b(model|background|nudge|nudging|first guess|forecast|analysis|reanalysis)\b/.test(wordsOf(variable)))
-    return true;
-  return [...variable.attributes.keys()].some((name) => /^(background|model)_(?!function)/.test(name));
+  const words = /\b(model|background|nwp|nudge|nudging|first guess|forecast|analysis|reanalysis)\b/;
+  const hasSource = [...variable.attributes.keys()].some((name) => /^(background|model)_(?!function)/.test(name));
+  return hasSource || words.test(wordsOf(variable));
 }
 
 /** The one variable that fits best; null where there is none, or where several fit alike. */
