@@ -2,6 +2,7 @@ import type { PassSummary, WatchArea } from '../../src/contract/values.ts';
 import { showEverything } from '../../src/wind/switches.ts';
 import type { Backend } from '../backend/backend.ts';
 import type { Chart } from '../layers/chart.ts';
+import { worldPx } from '../map/view.ts';
 import { createCellCard } from '../panels/cell-card/cell-card.ts';
 import { fillColumn } from '../panels/column/column.ts';
 import { createDemonstrationBanner } from '../panels/demonstration/demonstration.ts';
@@ -29,6 +30,9 @@ import { readAgain } from './join-backend.ts';
 
 /** Close enough to tell one cell from its neighbours. */
 const CELL_ZOOM = 6;
+
+/** About how much of the chart a card takes. */
+const CARD_PX = 330;
 
 /** What the page is made of and works with. */
 export interface Parts {
@@ -117,8 +121,8 @@ function goTo(
   goal: Goal,
 ): void {
   if (goal.kind === 'cell') {
-    chart.goTo({ lon: goal.lon, lat: goal.lat, zoom: Math.max(CELL_ZOOM, chart.camera().zoom) });
     void chooseCell(seen, backend, goal);
+    goToCell(chart, goal);
     return;
   }
   const area = chosenArea(seen.get());
@@ -126,6 +130,14 @@ function goTo(
   unfold();
   const { clock, passes, winds } = sections;
   ({ unseen: clock, 'hidden winds': winds, passes, water: sections.area })[goal.kind].reveal();
+}
+
+/** Brings a cell to the middle of the water left of its card. */
+function goToCell(chart: Chart, { lon, lat }: { lon: number; lat: number }): void {
+  const zoom = Math.max(CELL_ZOOM, chart.camera().zoom);
+  const isNorthUp = Math.abs(chart.camera().bearing) < 1;
+  const shiftDeg = isNorthUp ? ((CARD_PX / 2) * 360) / worldPx({ zoom }) : 0;
+  chart.goTo({ lon: lon + shiftDeg, lat, zoom });
 }
 
 function framePass({ seen, backend, chart }: Parts, passId: number): void {

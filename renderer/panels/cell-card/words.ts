@@ -81,6 +81,7 @@ export function linesOf(card: CellCard, nowMs: number): CardLine[] {
     ...(card.iceProbability !== null ? [{ name: 'Ice', text: `${formatPercent(card.iceProbability)} likely` }] : []),
     { name: 'Nearest land', text: describeLand(card.nearestLand) },
     { name: 'Radar', text: describeRadar(card) },
+    ...describeFlagWord(card),
     { name: 'From', text: `${card.file}, row ${card.row}, cell ${card.column}` },
   ];
 }
@@ -144,17 +145,20 @@ function directionWords(directionFrom: number): string {
 }
 
 function describeFlags(card: CellCard): string {
-  const words = describeSetFlags(card);
-  const raw = card.rawFlags === null ? '' : `; as in the file ${card.rawFlags}`;
-  const rain = card.checksRain ? '' : '; this file never checks rain';
-  return `${words}${raw}${rain}`;
+  return card.checksRain ? describeSetFlags(card) : `${describeSetFlags(card)}; this file never checks rain`;
 }
 
 function describeSetFlags(card: CellCard): string {
   if (card.flagReading === 'absent') return 'the file states no quality';
-  if (card.flagReading === 'unknown') return 'set in a way not known: none was read';
-  const reading = card.flagReading === 'one-bit-lower' ? ' (read one bit lower than the table says)' : '';
-  return (card.flagWords.length === 0 ? 'none set' : card.flagWords.join(', ')) + reading;
+  if (card.flagReading === 'unknown') return 'their meaning in this file is not known: none was read';
+  return card.flagWords.length === 0 ? 'none set' : card.flagWords.join(', ');
+}
+
+/** The flag word as the file holds it, and how it was read. */
+function describeFlagWord(card: CellCard): CardLine[] {
+  if (card.rawFlags === null) return [];
+  const reading = card.flagReading === 'one-bit-lower' ? ', read one bit lower than its table says' : '';
+  return [{ name: 'Flag word', text: `${card.rawFlags}${reading}` }];
 }
 
 function describeBackground(background: NonNullable<CellCard['background']>): string {

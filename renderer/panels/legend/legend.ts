@@ -5,7 +5,7 @@ import { markPicture } from '../shared/mark-picture.ts';
 import './legend.css';
 import { inks, marks, legendWords as words } from './words.ts';
 
-/** What the inks and marks of the chart say; it folds away to a button. */
+/** What the inks and marks of the chart say; it folds away to a button, as which it begins in a small window. */
 export function createLegend(): HTMLElement {
   const inkList = inks.map(({ beaufort, text }) =>
     make('li', {}, barbPicture(beaufort), make('span', {}, ...figures(text))),
@@ -40,6 +40,6 @@ export function createLegend(): HTMLElement {
     fold.textContent = isOpen ? words.close : words.open;
     fold.setAttribute('aria-expanded', String(isOpen));
   }
-  setOpen(true);
+  setOpen(!matchMedia('(width < 64rem) or (height < 44rem)').matches);
   return element;
 }

@@ -5,6 +5,8 @@ const figurePattern = /\d+(?:[.:-]\d+)*(?:°(?:\d+′)?)?(?:[NSEW]\b)?/g;
 
 /** A figure and its unit stay on one line. */
 const unitPattern = /(\d) (?=(?:kt|m\/s|h|min|days|km|NM|dB|UTC)\b|%)/g;
+/** So does what counts something and its number. */
+const numberedPattern = /\b(Beaufort|row|cell) (?=\d)/g;
 
 /** Text with its figures set apart, so that they can be set in the face whose digits are all of one width. */
 export function splitFigures(text: string): { text: string; isFigure: boolean }[] {
@@ -32,7 +34,7 @@ export function setFigures(element: Element, text: string): void {
 }
 
 function holdUnits(text: string): string {
-  return text.replace(unitPattern, '$1\u00a0');
+  return text.replace(unitPattern, '$1\u00a0').replace(numberedPattern, '$1\u00a0');
 }
 
 /** A count with its thousands set apart by a narrow space: '68 544'. */
