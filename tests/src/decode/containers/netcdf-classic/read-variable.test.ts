@@ -1,10 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { expect, test } from 'vitest';
 import { readNetcdfHeader } from '../../../../../src/decode/containers/netcdf-classic/read-netcdf-header.ts';
-import {
-  readVariable,
-  readNumbers,
-} from '../../../../../src/decode/containers/netcdf-classic/read-variable.ts';
+import { readNumbers, readVariable } from '../../../../../src/decode/containers/netcdf-classic/read-variable.ts';
 import { Problem } from '../../../../../src/problems/problem.ts';
 
 // Expected values: the .cdl text (or, for every type, the script) that the netCDF C library made these files from.
