@@ -63,7 +63,7 @@ test('calls 17.2 m/s near gale: 33.43 kt rounds to 33', () => {
 });
 
 test('says that no flag is set, and that this file never checks rain', () => {
-  expect(line(windCell, 'Flags')).toBe('none set; as in the file 0; this file never checks rain');
+  expect(line(windCell, 'Flags')).toBe('none set; this file never checks rain');
 });
 
 test('never calls unknown or absent flags none', () => {
