@@ -1,4 +1,4 @@
-import { Problem } from '../problems/problem.ts';
+import type { Problem } from '../problems/problem.ts';
 import type { Swath } from '../swath/swath.ts';
 
 /** What a file's bytes turned out to be. A damaged part is told in `problems`, beside what could still be read. */
