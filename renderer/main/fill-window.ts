@@ -56,7 +56,10 @@ export function fillWindow(parts: Parts): { card: HTMLElement; chooseFiles(): vo
     area: createWatchArea(parts),
   };
   const files = createLoadingPanel(seen, loading, (passId) => framePass(parts, passId));
-  const unfold = fillColumn(parts.column, [files.element, ...Object.values(sections).map(({ element }) => element)]);
+  const unfold = fillColumn(parts.column, files.open, [
+    files.list,
+    ...Object.values(sections).map(({ element }) => element),
+  ]);
   const line = createWatchLine(seen, {
     goTo: (goal) => goTo(parts, sections, unfold, goal),
     showEverything: () => changeSettings(seen, { switches: showEverything(), hiddenPassIds: [] }),

@@ -1,8 +1,11 @@
 import { button, make } from '../shared/make.ts';
 import { columnWords as words } from './words.ts';
 
-/** Fills the column beside the chart and lets it fold away; the returned function brings it back. */
-export function fillColumn(column: HTMLElement, parts: readonly HTMLElement[]): () => void {
+/**
+ * Fills the column beside the chart, `first` above what scrolls, and lets it fold away; the returned function brings it
+ * back.
+ */
+export function fillColumn(column: HTMLElement, first: HTMLElement, parts: readonly HTMLElement[]): () => void {
   const fold = button('', () => setFolded(!document.body.classList.contains('is-column-folded')), {
     class: 'column-fold',
   });
@@ -14,6 +17,6 @@ export function fillColumn(column: HTMLElement, parts: readonly HTMLElement[]): 
     fold.setAttribute('aria-expanded', String(!isFolded));
   }
   setFolded(false);
-  column.append(fold, make('div', { class: 'column-scroll' }, ...parts));
+  column.append(make('div', { class: 'column-head' }, first, fold), make('div', { class: 'column-scroll' }, ...parts));
   return () => setFolded(false);
 }

@@ -8,7 +8,8 @@ import { describeFate, describeStage, listReasons, loadingWords as words } from 
 
 /** The open button and what becomes of each file. */
 export interface LoadingPanel {
-  element: HTMLElement;
+  open: HTMLElement;
+  list: HTMLElement;
   /** Opens the file dialog. */
   chooseFiles(): void;
 }
@@ -45,7 +46,7 @@ export function createLoadingPanel(
   }
   seen.listen(['loads'], show);
   show();
-  return { element: make('div', { class: 'loading' }, open, input, list, clear), chooseFiles };
+  return { open, list: make('div', { class: 'loading' }, input, list, clear), chooseFiles };
 }
 
 function createLoadEntry(first: Load, loading: Loading, framePass: (passId: number) => void): Entry<Load> {

@@ -5,8 +5,7 @@ export const areaWords = {
   choose: 'The watch speaks of',
   view: 'the view',
   draw: 'Draw an area',
-  drawing:
-    'Press the corners of the area on the chart, one after the other; Enter or a double press closes it, Escape gives up.',
+  drawing: 'Draw it on the chart; Escape gives up.',
   name: 'Name of the area',
   keep: 'Keep it',
   drop: 'Let it go',

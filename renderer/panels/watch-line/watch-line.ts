@@ -36,6 +36,7 @@ export function createWatchLine(
     shown = watch.runs;
     if (watch.strongest) sentence.style.setProperty('--strongest', inkOfSpeed(watch.strongest.speedMs));
     showRuns(watch.runs, watch.hiddenGaleWinds > 0);
+    keepHeight(sentence);
     if (watchReading.state === 'read') setText(spoken, watch.runs.map((run) => run.text).join(''));
   }
 
@@ -66,8 +67,17 @@ export function createWatchLine(
     });
   }
 
+  addEventListener('resize', () => sentence.style.removeProperty('min-height'));
   const showThem = button(words.showThem, actions.showEverything, { class: 'show-them' });
   seen.listen(['watch', 'watchReading'], show);
   show(seen.get());
   return element;
+}
+
+/**
+ * Lets the sentence grow by a line but not shrink again: a shorter one would make the chart higher, and what comes into
+ * view could make it longer, without end.
+ */
+function keepHeight(sentence: HTMLElement): void {
+  sentence.style.minHeight = `${sentence.offsetHeight}px`;
 }
