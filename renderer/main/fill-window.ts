@@ -112,7 +112,6 @@ function createCard({ seen, backend }: Parts): HTMLElement {
     close,
     step: (from, rows, columns) =>
       void chooseCell(seen, backend, { ...from, row: from.row + rows, column: from.column + columns }),
-    copy: (text) => navigator.clipboard.writeText(text),
   });
 }
 
@@ -145,6 +144,7 @@ function goToCell(chart: Chart, { lon, lat }: { lon: number; lat: number }): voi
 
 function framePass({ seen, backend, chart }: Parts, passId: number): void {
   const pass = seen.get().passes.find((candidate) => candidate.passId === passId);
+  seen.change({ wantedPassId: passId });
   if (pass) void attempt(seen, 'The pass could not be shown', frame(backend, chart, pass));
 }
 

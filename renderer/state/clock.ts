@@ -43,10 +43,19 @@ export function standingAt(pass: Pick<PassSummary, 'endMs'>): number {
   return Math.ceil(pass.endMs / 60_000) * 60_000;
 }
 
-/** The newest pass, when there are passes and none of them lies in the window; else null. */
-export function passToStandAt(seen: Pick<Seen, 'passes' | 'settings' | 'systemMs'>): PassSummary | null {
+/**
+ * The pass that standing at is offered: the one last gone to or loaded where it lies outside the window, else the newest
+ * where no pass lies in the window, else none.
+ */
+export function passToStandAt(
+  seen: Pick<Seen, 'passes' | 'settings' | 'systemMs' | 'wantedPassId'>,
+): { pass: PassSummary; isWanted: boolean } | null {
   const window = windowOf(seen);
-  return seen.passes.some((pass) => isInWindow(pass, window)) ? null : newestPass(seen.passes);
+  const wanted = seen.passes.find((pass) => pass.passId === seen.wantedPassId);
+  if (wanted && !isInWindow(wanted, window)) return { pass: wanted, isWanted: true };
+  const newest = newestPass(seen.passes);
+  if (!newest || seen.passes.some((pass) => isInWindow(pass, window))) return null;
+  return { pass: newest, isWanted: false };
 }
 
 /** The moment of the pass before (-1) or after (+1) now, by the ends of passes; null where there is none. */

@@ -1,8 +1,9 @@
 import type { NewsLine } from '../../src/contract/news.ts';
 import type { Backend } from '../backend/backend.ts';
+import { isInWindow } from './clock.ts';
 import { adoptTask, changeLoad, hearNews, isUnderWay, type Load, waitingLoad } from './loads.ts';
 import { isCalledOff, reasonOf } from './reasons.ts';
-import type { SeenStore } from './seen.ts';
+import { type SeenStore, windowOf } from './seen.ts';
 
 /** Files on their way into the archive. */
 export interface Loading {
@@ -70,6 +71,19 @@ export function createLoading(seen: SeenStore, backend: Backend): Loading {
       const loads = hearNews(seen.get().loads, line, nextLoadId);
       if (loads.length > seen.get().loads.length) nextLoadId++;
       seen.change({ loads });
+      if (line.kind === 'file fate') wantLoaded(seen, line.fate.passIds);
     },
   };
+}
+
+/**
+ * Wants a pass just loaded to be seen, where other passes lie in the window; where none does, standing at the newest of
+ * all is offered instead.
+ */
+function wantLoaded(seen: SeenStore, passIds: readonly number[]): void {
+  const window = windowOf(seen.get());
+  const passId = passIds.at(-1);
+  if (passId !== undefined && seen.get().passes.some((pass) => isInWindow(pass, window))) {
+    seen.change({ wantedPassId: passId });
+  }
 }

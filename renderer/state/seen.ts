@@ -53,6 +53,8 @@ export interface Seen {
   /** Whether that answer still fits what the window shows. */
   watchReading: Reading<null>;
   loads: Load[];
+  /** The pass last gone to or loaded: where it lies outside the window, standing at it is offered. */
+  wantedPassId: number | null;
   /** What failed last, as a sentence, until it is dismissed. */
   trouble: string | null;
   /** Whether the host is heard. */
@@ -91,6 +93,7 @@ export function createSeen(systemMs: number): SeenStore {
     watch: null,
     watchReading: { state: 'none' },
     loads: [],
+    wantedPassId: null,
     trouble: null,
     isLinked: true,
   });

@@ -18,6 +18,9 @@ test('clears the demonstration with one press, and follows the system clock agai
   await expect(page.getByLabel('Now (UTC)')).toHaveValue(new RegExp(`^${new Date().getUTCFullYear()}`));
   const again = await application.restart();
   await expect(again.getByText('Nothing is loaded.')).toBeVisible();
+  await again.getByRole('button', { name: 'Load the demonstration' }).click();
+  await expect(again.locator('.demonstration')).toBeVisible();
+  await expect(again.getByLabel('Now (UTC)')).toHaveValue(/^2031-01-17/);
 });
 
 test('always shows the cautions in short, and all of them at a press', async ({ page }) => {

@@ -37,6 +37,17 @@ test('loads an old pass, offers to stand at it, and says what was seen', async (
   await expect(page.locator('.pass')).toContainText(`${galeWinds} of gale or more`);
 });
 
+test('says of a pass loaded into another time that it is not drawn, and offers to stand at it', async ({ page }) => {
+  await openFiles(page, [storm]);
+  await page.getByRole('button', { name: 'Stand at the newest pass' }).click();
+  const years = { ...corner, timeMs: corner.timeMs - 4 * 365 * 86_400_000 };
+  await openFiles(page, [{ name: 'older.bufr', buffer: drawSwathFile(stormRows, years) }]);
+  const notice = page.locator('.notice').filter({ hasText: 'older.bufr is outside the time window and not drawn' });
+  await notice.getByRole('button', { name: 'Stand at it' }).click();
+  await expect(page.getByLabel('Now (UTC)')).toHaveValue('2027-03-03 06:01');
+  await expect(notice).toBeHidden();
+});
+
 test('says of a file given twice that it is already there', async ({ page }) => {
   await openFiles(page, [storm]);
   await openFiles(page, [{ ...storm, name: 'the same again.bufr' }]);

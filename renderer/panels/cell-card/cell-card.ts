@@ -4,6 +4,7 @@ import { inkOfSpeed } from '../shared/class-ink.ts';
 import { figures } from '../shared/figures.ts';
 import { button, make, setText } from '../shared/make.ts';
 import './cell-card.css';
+import { copyText } from './copy-text.ts';
 import {
   describeBeam,
   describeNoSolutions,
@@ -19,7 +20,6 @@ export interface CardActions {
   close(): void;
   /** Chooses a neighbour: so many rows and cells further in the same pass. */
   step(from: CellPlace, rows: number, columns: number): void;
-  copy(text: string): Promise<void>;
 }
 
 /** The card of the chosen cell. It closes with Escape, and stands where it does not cover its cell (main sees to that). */
@@ -34,7 +34,7 @@ export function createCellCard(seen: SeenStore, actions: CardActions): HTMLEleme
     const { card, settings } = seen.get();
     if (card.state !== 'read') return;
     const text = writeCard(card.value, settings.speedUnit, nowOf(seen.get()));
-    const outcome = await actions.copy(text).then(
+    const outcome = await copyText(text).then(
       () => words.copied,
       () => words.notCopied,
     );

@@ -4,7 +4,7 @@ import { nowOf, type Seen, type SeenStore } from '../../state/seen.ts';
 import { figures } from '../shared/figures.ts';
 import { button, make } from '../shared/make.ts';
 import './notices.css';
-import { describeOldPasses, noticeWords as words } from './words.ts';
+import { describeOldPasses, describeOutside, noticeWords as words } from './words.ts';
 
 /** What the notices can set going. */
 export interface NoticeActions {
@@ -29,7 +29,10 @@ export function createNotices(seen: SeenStore, actions: NoticeActions): HTMLElem
     shown = text;
     element.replaceChildren(...notices.map(drawNotice));
   }
-  seen.listen(['settings', 'systemMs', 'status', 'passes', 'blocksReading', 'isLinked', 'loads', 'trouble'], show);
+  seen.listen(
+    ['settings', 'systemMs', 'status', 'passes', 'blocksReading', 'isLinked', 'loads', 'trouble', 'wantedPassId'],
+    show,
+  );
   show();
   return element;
 }
@@ -58,10 +61,18 @@ function noticeOfPasses(seen: SeenStore, actions: NoticeActions): Notice[] {
     const load = { text: words.loadDemonstration, press: actions.loadDemonstration };
     return [{ text: words.empty, kind: 'plain', buttons: state.status.hasDemonstration ? [load] : [] }];
   }
-  const newest = passToStandAt(state);
-  if (!newest) return [];
-  const stand = { text: words.standAtNewest, press: () => setClock(seen, standingAt(newest)) };
-  return [{ text: describeOldPasses(newest, nowOf(state)), kind: 'plain', buttons: [stand] }];
+  const offer = passToStandAt(state);
+  if (!offer) return [];
+  const { pass, isWanted } = offer;
+  const stand = {
+    text: isWanted ? words.standAtIt : words.standAtNewest,
+    press: () => setClock(seen, standingAt(pass)),
+  };
+  const text = isWanted ? describeOutside(pass, nowOf(state)) : describeOldPasses(pass, nowOf(state));
+  const buttons = isWanted
+    ? [stand, { text: words.leaveIt, press: () => seen.change({ wantedPassId: null }) }]
+    : [stand];
+  return [{ text, kind: 'plain', buttons }];
 }
 
 function drawNotice({ text, kind, buttons }: Notice): HTMLElement {

@@ -9,6 +9,8 @@ export const noticeWords = {
   tryAgain: 'Try again',
   dismiss: 'Dismiss',
   standAtNewest: 'Stand at the newest pass',
+  standAtIt: 'Stand at it',
+  leaveIt: 'Leave the clock',
   empty: 'Nothing is loaded. Open swath files, or drop them anywhere in this window.',
   loadDemonstration: 'Load the demonstration (invented data)',
 } as const;
@@ -17,6 +19,12 @@ export const noticeWords = {
 export function describeOldPasses(newest: Pick<PassSummary, 'endMs'>, nowMs: number): string {
   const moment = `${formatDate(newest.endMs)} ${formatClock(newest.endMs)} UTC`;
   return `No pass lies in the time window. The newest ended ${moment}, ${formatAge(newest.endMs, nowMs)}.`;
+}
+
+/** That a pass gone to or just loaded lies outside the window, and when it was: the offer to stand there. */
+export function describeOutside(pass: Pick<PassSummary, 'file' | 'endMs'>, nowMs: number): string {
+  const moment = `${formatDate(pass.endMs)} ${formatClock(pass.endMs)} UTC`;
+  return `${pass.file} is outside the time window and not drawn: it ended ${moment}, ${formatAge(pass.endMs, nowMs)}.`;
 }
 
 /** What the chart draws, in words: 'Chart: 312 winds drawn in view, strongest 63 kt'. */

@@ -4,7 +4,7 @@ export const DIAL_HOURS = 12;
 /** The ring's edges and the longest wedge, in units of the drawing. */
 export const RING_INNER = 60;
 export const RING_OUTER = 67;
-export const WEDGE_LENGTH = 38;
+export const WEDGE_LENGTH = 32;
 
 const HOUR_MS = 3_600_000;
 /** A pass of a few minutes still shows as a wedge this wide. */

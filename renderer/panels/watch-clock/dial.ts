@@ -43,16 +43,16 @@ export function createDial(actions: DialActions): { element: SVGSVGElement; show
   const wedges = draw('g', { class: 'dial-wedges' });
   const time = draw('text', { class: 'dial-time', y: 1 });
   const date = draw('text', { class: 'dial-date', y: 19 });
-  const knob = draw('g', { class: 'dial-knob', ...sliderOf(words.reach) }, draw('circle', { r: 6.5 }));
+  const knob = draw('g', { class: 'dial-knob', ...handleOf(words.reach) }, draw('circle', { r: 6.5 }));
   const hand = draw(
     'g',
-    { class: 'dial-hand', ...sliderOf(words.turn) },
+    { class: 'dial-hand', ...handleOf(words.turn) },
     draw('path', { d: 'M -6 -56 h 12 l -6 9 z' }),
   );
   const face = draw('circle', { class: 'dial-face', r: RING_INNER });
   const element = draw(
     'svg',
-    { class: 'dial', viewBox: '-126 -116 252 232', role: 'group', 'aria-label': words.dial },
+    { class: 'dial', viewBox: '-137 -114 274 228', role: 'group', 'aria-label': words.dial },
     draw('circle', { class: 'dial-whole', r: RING_OUTER + 2 + WEDGE_LENGTH }),
     face,
     draw('path', { class: 'dial-ring', d: ringPiece(0, 360, RING_INNER, RING_OUTER), 'fill-rule': 'evenodd' }),
@@ -133,13 +133,13 @@ function hourMarks(): SVGElement[] {
   });
 }
 
-function sliderOf(label: string) {
-  return { role: 'slider', tabindex: 0, 'aria-label': label };
+function handleOf(label: string) {
+  return { role: 'spinbutton', tabindex: 0, 'aria-label': label };
 }
 
-function setValue(slider: SVGElement, value: number, text: string): void {
-  slider.setAttribute('aria-valuenow', String(value));
-  slider.setAttribute('aria-valuetext', text);
+function setValue(handle: SVGElement, value: number, text: string): void {
+  handle.setAttribute('aria-valuenow', String(value));
+  handle.setAttribute('aria-valuetext', text);
 }
 
 /** Follows the pointer from a handle; `move` gets the age under it and the last one it kept, and returns the one to keep. */

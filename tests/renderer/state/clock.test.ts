@@ -23,9 +23,19 @@ test('counts ages and the window from the system clock until another is set', ()
 test('offers the newest pass only when none lies in the window', () => {
   const old = passBetween('01:00:00', '01:20:00');
   const older = passBetween('00:00:00', '00:20:00');
-  expect(passToStandAt(seenAt('20:00:00', [older, old]).get())).toBe(old);
+  expect(passToStandAt(seenAt('20:00:00', [older, old]).get())).toEqual({ pass: old, isWanted: false });
   expect(passToStandAt(seenAt('02:00:00', [older, old]).get())).toBeNull();
   expect(passToStandAt(seenAt('20:00:00', []).get())).toBeNull();
+});
+
+test('offers a pass that was gone to and lies outside the window, though others lie in it', () => {
+  const near = { ...passBetween('01:00:00', '01:20:00'), passId: 1 };
+  const far = { ...passBetween('00:00:00', '00:20:00'), passId: 2, endMs: at('00:20:00') - 86_400_000 };
+  const seen = seenAt('02:00:00', [near, far]);
+  seen.change({ wantedPassId: 2 });
+  expect(passToStandAt(seen.get())).toEqual({ pass: far, isWanted: true });
+  seen.change({ wantedPassId: 1 });
+  expect(passToStandAt(seen.get())).toBeNull();
 });
 
 test('sees a pass that reaches into the window by its end alone', () => {
