@@ -12,7 +12,6 @@ import {
   describeRadar,
   describeSpan,
   describeStrongest,
-  listNotes,
   passWords as words,
 } from './words.ts';
 
@@ -74,7 +73,7 @@ export function createPassEntry(first: ListedPass, actions: PassActions): Entry<
       checkbox.checked = !isHidden;
       element.classList.toggle('is-hidden', isHidden || !isInside);
       element.style.setProperty('--class-ink', pass.maxSpeedMs === null ? 'var(--rule)' : inkOfSpeed(pass.maxSpeedMs));
-      showNotes(notes, listNotes(pass));
+      showNotes(notes, pass.notes);
       howRead.hidden = notes.childElementCount === 0;
     },
   };

@@ -14,11 +14,6 @@ export const passWords = {
   remove: { ask: 'Remove', question: 'Remove this pass from the archive? The file itself stays.', doIt: 'Remove it' },
   howRead: 'How it was read',
   demonstration: 'invented',
-  directionNotStated: 'The file does not say which way its directions point.',
-  flagsUnknown: 'What the flags of this file mean is not known: none was applied.',
-  flagsAbsent: 'The file holds no quality flags.',
-  flagsOneBitLower: 'The flags of this file stand one bit lower than their table says; they were read so.',
-  rainNotChecked: 'This file never checks for rain.',
 } as const;
 
 /** How many passes there are, in the window and hidden: '3 in the window, 1 hidden, 5 in all'. */
@@ -30,7 +25,7 @@ export function countPasses(inWindow: number, hidden: number, all: number): stri
   return parts.join(', ');
 }
 
-/** When a pass was made: '17 Jan'-free and sortable, '2031-01-17 23:40 to 23:52 UTC'; the second date only where it differs. */
+/** When a pass was made, as dates sort: '2031-01-17 23:40 to 23:52 UTC'; the second date only where it differs. */
 export function describeSpan(pass: Pick<PassSummary, 'startMs' | 'endMs'>): string {
   const [startDate, endDate] = [formatDate(pass.startMs), formatDate(pass.endMs)];
   const end = startDate === endDate ? formatClock(pass.endMs) : `${endDate} ${formatClock(pass.endMs)}`;
@@ -60,15 +55,4 @@ export function describeCounts(pass: Pick<PassSummary, 'cells' | 'winds' | 'gale
   const parts = [`${formatCount(pass.cells)} cells`, `${formatCount(pass.winds)} winds`];
   if (pass.galeWinds > 0) parts.push(`${formatCount(pass.galeWinds)} of gale or more`);
   return parts.join(', ');
-}
-
-/** All that a reader must know about how a pass was read, in plain sentences. */
-export function listNotes(pass: PassSummary): string[] {
-  const notes = [...pass.notes];
-  if (!pass.isDirectionStated) notes.push(passWords.directionNotStated);
-  if (pass.flagReading === 'unknown') notes.push(passWords.flagsUnknown);
-  if (pass.flagReading === 'absent') notes.push(passWords.flagsAbsent);
-  if (pass.flagReading === 'one-bit-lower') notes.push(passWords.flagsOneBitLower);
-  if (!pass.checksRain) notes.push(passWords.rainNotChecked);
-  return [...new Set(notes)];
 }

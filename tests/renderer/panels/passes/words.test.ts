@@ -4,9 +4,7 @@ import {
   describeRadar,
   describeSpan,
   describeStrongest,
-  listNotes,
 } from '../../../../renderer/panels/passes/words.ts';
-import type { PassSummary } from '../../../../src/contract/values.ts';
 
 const at = (moment: string) => Date.parse(`${moment}Z`);
 
@@ -30,17 +28,6 @@ test('gives the strongest wind in the chosen unit, and says where a pass has non
   expect(describeStrongest({ maxSpeedMs: 27.9 }, 'knots')).toBe('strongest 54 kt, storm');
   expect(describeStrongest({ maxSpeedMs: 27.9 }, 'metresPerSecond')).toBe('strongest 27.9 m/s, storm');
   expect(describeStrongest({ maxSpeedMs: null }, 'knots')).toBe('no wind in it');
-});
-
-test('says what a file leaves unknown', () => {
-  const pass = {
-    notes: [],
-    isDirectionStated: false,
-    flagReading: 'unknown',
-    checksRain: false,
-  } as unknown as PassSummary;
-  expect(listNotes(pass)).toHaveLength(3);
-  expect(listNotes({ ...pass, isDirectionStated: true, flagReading: 'as-table', checksRain: true })).toEqual([]);
 });
 
 test('counts passes in the window, hidden and in all', () => {
