@@ -45,7 +45,8 @@ export function createCellCard(seen: SeenStore, actions: CardActions): HTMLEleme
   function show(state: Seen): void {
     const { card } = state;
     element.hidden = card.state === 'none';
-    foot.hidden = card.state !== 'read';
+    foot.hidden = card.state === 'reading';
+    copy.hidden = card.state !== 'read';
     if (card.state === 'reading') body.replaceChildren(make('p', {}, words.reading));
     if (card.state === 'failed') body.replaceChildren(make('p', {}, words.failed(card.reason)));
     if (card.state === 'read') body.replaceChildren(...drawCard(card.value, state));

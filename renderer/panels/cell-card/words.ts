@@ -24,7 +24,7 @@ export const cardWords = {
   copied: 'Copied',
   notCopied: 'Could not be copied',
   reading: 'Reading this cell …',
-  failed: (reason: string) => `This cell could not be read: ${reason}.`,
+  failed: (reason: string) => `No card for this cell: ${reason}`,
   cautions: 'Before you believe it',
   steps: 'Neighbouring cells',
   stepNames: { before: 'row before', after: 'row after', left: 'cell before', right: 'cell after' },

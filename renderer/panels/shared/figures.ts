@@ -6,7 +6,7 @@ const figurePattern = /\d+(?:[.:-]\d+)*(?:°(?:\d+′)?)?(?:[NSEW]\b)?/g;
 /** A figure and its unit stay on one line. */
 const unitPattern = /(\d) (?=(?:kt|m\/s|h|min|days|km|NM|dB|UTC)\b|%)/g;
 /** So does what counts something and its number. */
-const numberedPattern = /\b(Beaufort|row|cell) (?=\d)/g;
+const numberedPattern = /\b(Beaufort|row|cell|h|days) (?=\d)/g;
 
 /** Text with its figures set apart, so that they can be set in the face whose digits are all of one width. */
 export function splitFigures(text: string): { text: string; isFigure: boolean }[] {
