@@ -14,7 +14,7 @@ interface Layer {
   importsComputed?: boolean;
 }
 
-export interface LayerTable {
+interface LayerTable {
   everyone: string[];
   layers: Layer[];
   vagueNames: string[];
@@ -23,7 +23,7 @@ export interface LayerTable {
   made: string[];
 }
 
-export interface LayerReport {
+interface LayerReport {
   filesRead: number;
   importsRead: number;
   /** One sentence for each thing that breaks a rule, with its file and line. */

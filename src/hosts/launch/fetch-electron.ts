@@ -7,7 +7,7 @@ const PATIENCE_MS = 20_000;
 const LOOK_EVERY_MS = 500;
 
 /** One try to fetch the Electron runtime. */
-export interface FetchTry {
+interface FetchTry {
   packageFolder: string;
   cacheFolder: string;
   /** Asked for by name: then an earlier failure does not count. */

@@ -5,7 +5,7 @@ import { once } from 'node:events';
 const EARLY_MS = 15_000;
 
 /** How the Electron host is started. */
-export interface ElectronRun {
+interface ElectronRun {
   program: string;
   /** Passed on to the Electron host: the project's folder, then its options. */
   args: string[];

@@ -20,7 +20,7 @@ export interface Knock {
 }
 
 /** A request turned away: the HTTP status and a sentence for people. */
-export interface Refusal {
+interface Refusal {
   status: number;
   message: string;
 }

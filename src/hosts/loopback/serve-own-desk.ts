@@ -4,7 +4,7 @@ import { loadDemonstrationIfUnused, openOwnDesk } from '../shared/open-own-desk.
 import { startLoopback } from './start-loopback.ts';
 
 /** What is to be served, and where. */
-export interface ServeOptions {
+interface ServeOptions {
   projectFolder: string;
   archivePath: string | undefined;
   port: number | undefined;

@@ -3,7 +3,7 @@ import { join } from 'node:path';
 import { type Desk, openDesk } from '../../operations/desk.ts';
 
 /** What a host knows that opens a desk over this installation. */
-export interface OwnDeskOptions {
+interface OwnDeskOptions {
   /** The folder that holds package.json, assets/ and dist/. */
   projectFolder: string;
   /** The archive the user chose; the platform's own place when undefined. */
