@@ -28,7 +28,7 @@ export function findElectronProgram(
 }
 
 function findOwnProgram(packageFolder: string, program: string | undefined): string | undefined {
-  // The version file is the last thing unpacked: without it the runtime is not whole.
+  // The package's script writes path.txt once all is unpacked.
   if (program === undefined || !existsSync(join(packageFolder, 'dist', 'version'))) return undefined;
   return join(packageFolder, 'dist', program);
 }

@@ -1,5 +1,5 @@
 import { type ChildProcess, spawn } from 'node:child_process';
-import { existsSync, mkdirSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { mkdirSync, readdirSync, readFileSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 
 /** A try without progress for this long is given up, ms. */
@@ -26,8 +26,8 @@ interface FetchTry {
  */
 export async function fetchElectron(wanted: FetchTry): Promise<string | undefined> {
   const { variables = process.env, patienceMs = PATIENCE_MS } = wanted;
-  if (variables.CI || variables.NODE_ENV === 'test' || variables.CROSSTRACK_NO_FETCH)
-    return 'nothing is fetched in tests';
+  const isTest = variables.CI || variables.NODE_ENV === 'test' || variables.CROSSTRACK_NO_FETCH;
+  if (isTest) return 'nothing is fetched in tests';
   const memory = join(wanted.cacheFolder, 'electron-tried.json');
   const version = readVersion(wanted.packageFolder);
   if (!wanted.isAsked && readTried(memory) === version) return 'an earlier try to fetch it failed';
@@ -90,13 +90,14 @@ function watch(
   });
 }
 
+/** Bytes in a folder and below; 0 while it is not there, or while it changes under our eyes. */
 function measureFolder(folder: string): number {
-  if (!existsSync(folder)) return 0;
-  const files = readdirSync(folder, { withFileTypes: true, recursive: true }).filter((entry) => entry.isFile());
-  return files.reduce(
-    (sum, file) => sum + (statSync(join(file.parentPath, file.name), { throwIfNoEntry: false })?.size ?? 0),
-    0,
-  );
+  try {
+    const files = readdirSync(folder, { withFileTypes: true, recursive: true }).filter((entry) => entry.isFile());
+    return files.reduce((sum, file) => sum + statSync(join(file.parentPath, file.name)).size, 0);
+  } catch {
+    return 0;
+  }
 }
 
 function readVersion(packageFolder: string): string {

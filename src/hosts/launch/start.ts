@@ -29,7 +29,7 @@ async function launch(args: string[], stop: AbortSignal): Promise<number> {
   try {
     await buildIfStale(projectFolder, say);
     if (options.isWindowWanted && options.port === undefined && hasDisplay()) {
-      const reason = await openElectron(options, stop);
+      const reason = await openElectron(options, stop).catch((thrown: Error) => thrown.message);
       if (reason === undefined || stop.aborted) return 0;
       say(`Electron is not used here (${reason}): opening a browser's window instead.`);
     }
