@@ -15,6 +15,7 @@ const main: UserConfig = {
     rolldownOptions: {
       input: { main: here('src/hosts/electron/main.ts'), 'load-worker': here('src/workers/load-worker.ts') },
       external: ['electron'],
+      checks: { pluginTimings: false },
       output: { entryFileNames: '[name].js', chunkFileNames: '[name]-[hash].js' },
     },
   },
@@ -32,6 +33,8 @@ const renderer: UserConfig = {
     // Files that the content policy forbids as data: URLs (fonts) stay files.
     assetsInlineLimit: 0,
     chunkSizeWarningLimit: 2000,
+    // A busy machine is no fault of a plugin.
+    rolldownOptions: { checks: { pluginTimings: false } },
   },
 };
 
