@@ -14,13 +14,13 @@ export interface Shown {
 export const NOT_SHOWN = 0;
 /** Looked at without a wind. */
 export const SHOWN_WITHOUT_WIND = 1;
-/** A wind was seen, and the switches hide it: the water stays seen. */
+/** A wind was seen, and a switch or its hidden pass keeps it off the chart: the water stays seen. */
 export const WIND_HIDDEN = 2;
 export const WIND_SHOWN = 3;
 
 /**
- * Sorts all cells into the four kinds above. Cells outside the window or of a hidden pass are not shown at all, so that
- * their water counts as not looked at.
+ * Sorts all cells into the four kinds above. Cells outside the window are not shown at all, so that their water counts as
+ * not looked at; hiding a pass hides its winds, but does not unsee its water.
  */
 export function sortCells(cells: Cells, shown: Shown): Uint8Array<ArrayBuffer> {
   const kinds = new Uint8Array(cells.count);
@@ -30,13 +30,13 @@ export function sortCells(cells: Cells, shown: Shown): Uint8Array<ArrayBuffer> {
   const fromS = shown.window.fromMs / 1000;
   const toS = shown.window.toMs / 1000;
   cells.blocks.forEach((block, b) => {
-    if (hiddenPasses.has(block.passId)) return;
+    const isHiddenPass = hiddenPasses.has(block.passId);
     const { state, timeS, flags, speedMs } = block;
     const first = cells.firstCell[b];
     for (let cell = 0; cell < block.cells; cell++) {
       if (state[cell] === NEVER_LOOKED || timeS[cell] < fromS || timeS[cell] > toS) continue;
       if (state[cell] !== WIND) kinds[first + cell] = SHOWN_WITHOUT_WIND;
-      else if ((flags[cell] & mask) !== 0 || !beaufortShown[beaufortOfSpeed(speedMs[cell])]) {
+      else if (isHiddenPass || (flags[cell] & mask) !== 0 || !beaufortShown[beaufortOfSpeed(speedMs[cell])]) {
         kinds[first + cell] = WIND_HIDDEN;
       } else kinds[first + cell] = WIND_SHOWN;
     }
