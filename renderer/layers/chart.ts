@@ -90,9 +90,11 @@ export function createChart(container: HTMLElement, options: ChartOptions): Char
   let areWordsStale = true;
   let isDrawing = false;
 
-  function show(): void {
+  function show(areCellsNew: boolean): void {
     if (!shown) return;
+    const before = kinds;
     kinds = sortCells(cells, shown);
+    if (!areCellsNew && areEqual(kinds, before)) return;
     sight.setSight(cells, kinds);
     barbs.setWinds({ cells, ...thinWinds(cells, sorted, kinds) });
     words.place([], view());
@@ -162,11 +164,12 @@ export function createChart(container: HTMLElement, options: ChartOptions): Char
       blocks = next;
       cells = joinBlocks(next);
       sorted = sortWinds(cells);
-      show();
+      show(true);
     },
     setShown(next) {
+      const isFirst = shown === null;
       shown = next;
-      show();
+      show(isFirst);
     },
     setLight(name) {
       light = lights[name];
@@ -216,6 +219,10 @@ export function createChart(container: HTMLElement, options: ChartOptions): Char
       note.remove();
     },
   };
+}
+
+function areEqual(a: Uint8Array, b: Uint8Array): boolean {
+  return a.length === b.length && a.every((kind, i) => kind === b[i]);
 }
 
 function listen<Listener>(listeners: Set<Listener>, listener: Listener): () => void {

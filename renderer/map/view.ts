@@ -60,6 +60,12 @@ export function reachOf(view: View, growPx = 0): Reach {
   return { west: Math.min(...xs), east: Math.max(...xs), north: Math.min(...ys), south: Math.max(...ys) };
 }
 
+/** Whether one box holds another; one a world wide or more holds every x. */
+export function holdsReach(outer: Reach, inner: Reach): boolean {
+  const isHeldAcross = outer.east - outer.west >= 1 || (inner.west >= outer.west && inner.east <= outer.east);
+  return isHeldAcross && inner.north >= outer.north && inner.south <= outer.south;
+}
+
 /**
  * The box of the view in degrees. West > east when it crosses the date line; -180 to 180 when it is a world wide or more.
  */

@@ -1,4 +1,4 @@
-import { type Reach, reachOf, type View, worldPx } from '../../map/view.ts';
+import { holdsReach, type Reach, reachOf, type View, worldPx } from '../../map/view.ts';
 import { type Cells, directionOf, isInReach, isSouth } from '../shared/cells.ts';
 import { levelFor, NO_LEVEL } from './bins.ts';
 import { type DrawingList, listDrawing } from './drawing-list.ts';
@@ -59,9 +59,7 @@ export function isLaidOutFor(layout: Layout, winds: Winds, view: View, isThinned
   if (layout.winds !== winds || layout.scale.level !== scale.level || layout.scale.worldPx !== scale.worldPx) {
     return false;
   }
-  const needed = reachOf(view, USED_PX);
-  const { west, east, north, south } = layout.reach;
-  return needed.west >= west && needed.east <= east && needed.north >= north && needed.south <= south;
+  return holdsReach(layout.reach, reachOf(view, USED_PX));
 }
 
 function scaleFor(view: View, isThinned: boolean): Scale {

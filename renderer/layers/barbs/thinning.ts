@@ -16,14 +16,18 @@ export interface ThinnedWinds {
 
 /** Sorts the winds of joined blocks by their place on the earth. */
 export function sortWinds(cells: Cells): SortedWinds {
-  const winds: number[] = [];
-  cells.blocks.forEach((block, b) => {
-    for (let i = 0; i < block.cells; i++) if (block.state[i] === WIND) winds.push(cells.firstCell[b] + i);
+  const winds = new Uint32Array(cells.count);
+  const keys = new Uint32Array(cells.count);
+  let count = 0;
+  cells.blocks.forEach(({ state }, b) => {
+    for (let i = 0; i < state.length; i++) {
+      if (state[i] !== WIND) continue;
+      const cell = cells.firstCell[b] + i;
+      winds[count] = cell;
+      keys[count++] = binKey(cells.x[cell], cells.y[cell]);
+    }
   });
-  const sorted = { cells: Uint32Array.from(winds), keys: new Uint32Array(winds.length) };
-  winds.forEach((cell, i) => {
-    sorted.keys[i] = binKey(cells.x[cell], cells.y[cell]);
-  });
+  const sorted = { cells: winds.subarray(0, count), keys: keys.subarray(0, count) };
   sortByKey(sorted.cells, sorted.keys);
   return sorted;
 }

@@ -13,8 +13,6 @@ export interface SeenMask {
   remove(): void;
 }
 
-/** Samples for each pixel: edges are smoothed while what overlaps stays one. */
-const SAMPLES = 4;
 const FLOATS_PER_QUAD = 8;
 /** Corners of a quad in the order of its two triangles. */
 const QUAD = [0, 1, 2, 2, 1, 3];
@@ -23,9 +21,7 @@ const QUAD = [0, 1, 2, 2, 1, 3];
 export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
   const program = linkProgram(gl, withCamera(maskVertex), maskFragment);
   const texture = gl.createTexture();
-  const samples = gl.createRenderbuffer();
-  const sampled = gl.createFramebuffer();
-  const resolved = gl.createFramebuffer();
+  const framebuffer = gl.createFramebuffer();
   const corners = gl.createBuffer();
   const indices = gl.createBuffer();
   const layout = gl.createVertexArray();
@@ -48,13 +44,10 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
     size = { width, height };
     gl.bindTexture(gl.TEXTURE_2D, texture);
     gl.texImage2D(gl.TEXTURE_2D, 0, gl.RG8, width, height, 0, gl.RG, gl.UNSIGNED_BYTE, null);
-    gl.texParameteri(gl.TEXTURE_2D, gl.TEXTURE_MIN_FILTER, gl.NEAREST);
-    gl.texParameteri(gl.TEXTURE_2D, gl.TEXTURE_MAG_FILTER, gl.NEAREST);
-    gl.bindRenderbuffer(gl.RENDERBUFFER, samples);
-    gl.renderbufferStorageMultisample(gl.RENDERBUFFER, SAMPLES, gl.RG8, width, height);
-    gl.bindFramebuffer(gl.FRAMEBUFFER, sampled);
-    gl.framebufferRenderbuffer(gl.FRAMEBUFFER, gl.COLOR_ATTACHMENT0, gl.RENDERBUFFER, samples);
-    gl.bindFramebuffer(gl.FRAMEBUFFER, resolved);
+    for (const side of [gl.TEXTURE_WRAP_S, gl.TEXTURE_WRAP_T]) gl.texParameteri(gl.TEXTURE_2D, side, gl.CLAMP_TO_EDGE);
+    gl.texParameteri(gl.TEXTURE_2D, gl.TEXTURE_MIN_FILTER, gl.LINEAR);
+    gl.texParameteri(gl.TEXTURE_2D, gl.TEXTURE_MAG_FILTER, gl.LINEAR);
+    gl.bindFramebuffer(gl.FRAMEBUFFER, framebuffer);
     gl.framebufferTexture2D(gl.FRAMEBUFFER, gl.COLOR_ATTACHMENT0, gl.TEXTURE_2D, texture, 0);
   }
 
@@ -90,7 +83,7 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
     },
     draw(view) {
       takeSize();
-      gl.bindFramebuffer(gl.FRAMEBUFFER, sampled);
+      gl.bindFramebuffer(gl.FRAMEBUFFER, framebuffer);
       gl.viewport(0, 0, size.width, size.height);
       gl.disable(gl.BLEND);
       gl.disable(gl.DEPTH_TEST);
@@ -103,18 +96,12 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
       gl.bindVertexArray(layout);
       drawQuads(view);
       gl.bindVertexArray(null);
-      gl.bindFramebuffer(gl.READ_FRAMEBUFFER, sampled);
-      gl.bindFramebuffer(gl.DRAW_FRAMEBUFFER, resolved);
-      const { width, height } = size;
-      gl.blitFramebuffer(0, 0, width, height, 0, 0, width, height, gl.COLOR_BUFFER_BIT, gl.NEAREST);
       gl.bindFramebuffer(gl.FRAMEBUFFER, null);
     },
     remove() {
       gl.deleteProgram(program.program);
       gl.deleteTexture(texture);
-      gl.deleteRenderbuffer(samples);
-      gl.deleteFramebuffer(sampled);
-      gl.deleteFramebuffer(resolved);
+      gl.deleteFramebuffer(framebuffer);
       gl.deleteBuffer(corners);
       gl.deleteBuffer(indices);
       gl.deleteVertexArray(layout);

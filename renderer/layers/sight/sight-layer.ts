@@ -1,5 +1,5 @@
 import type { CustomLayerInterface } from 'maplibre-gl';
-import { type Reach, reachOf, type View } from '../../map/view.ts';
+import { holdsReach, type Reach, reachOf, type View } from '../../map/view.ts';
 import type { Light } from '../../state/lights.ts';
 import type { Cells } from '../shared/cells.ts';
 import { tileFootprints } from './footprint-tiles.ts';
@@ -11,6 +11,9 @@ export interface SightLayer extends CustomLayerInterface {
   setSight(cells: Cells, kinds: Uint8Array): void;
   setLight(light: Light): void;
 }
+
+/** The map's own background, which this layer covers. */
+const BACKGROUND_LAYER = 'water';
 
 /** Footprints are laid out for a view grown by so many CSS pixels, so that a short pan lays out nothing. */
 const GROWN_PX = 384;
@@ -29,7 +32,7 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
   function layOut(now: View): void {
     if (!sight || !mask) return;
     const most = mostPerTile(now.zoom);
-    if (laidOut?.sight === sight && laidOut.most === most && isWithin(reachOf(now), laidOut.reach)) return;
+    if (laidOut?.sight === sight && laidOut.most === most && holdsReach(laidOut.reach, reachOf(now))) return;
     laidOut = { sight, most, reach: reachOf(now, GROWN_PX) };
     mask.fill(tileFootprints(sight.cells, sight.kinds, most, laidOut.reach));
   }
@@ -44,7 +47,8 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
     setLight(next) {
       light = next;
     },
-    onAdd(_map, gl) {
+    onAdd(map, gl) {
+      map.setLayoutProperty(BACKGROUND_LAYER, 'visibility', 'none');
       mask = createSeenMask(gl);
       water = createWater(gl);
       laidOut = null;
@@ -74,10 +78,4 @@ function mostPerTile(zoom: number): number {
   if (zoom < 2.2) return 8;
   if (zoom < 4.2) return 4;
   return zoom < 6.2 ? 2 : 1;
-}
-
-function isWithin(inner: Reach, outer: Reach): boolean {
-  return (
-    inner.west >= outer.west && inner.east <= outer.east && inner.north >= outer.north && inner.south <= outer.south
-  );
 }

@@ -1,6 +1,6 @@
 import { type View, worldPx } from '../../map/view.ts';
 import type { Light } from '../../state/lights.ts';
-import { linkProgram, parseColour } from '../shared/webgl.ts';
+import { linkProgram, type Program, parseColour } from '../shared/webgl.ts';
 import waterFragment from './water.fragment.glsl?raw';
 import waterVertex from './water.vertex.glsl?raw';
 
@@ -11,11 +11,11 @@ export interface Water {
 }
 
 /**
- * Steps between hatch lines and between dots at a whole zoom, CSS pixels. Both go a whole number of times into the
- * world, so that the pattern runs on across the date line.
+ * Lines and dots round the world at zoom 0, every other of them faint. Whole and even numbers, so that the pattern runs
+ * on across the date line. At a whole zoom the strong lines are 7 CSS pixels apart and the strong dots 6.7.
  */
-const LINE_STEP_PX = 512 / Math.SQRT2 / 52;
-const DOT_STEP_PX = 512 / 76;
+const LINES_PER_WORLD = 104;
+const DOTS_PER_WORLD = 152;
 
 /** The water on the graphics card. */
 export function createWater(gl: WebGL2RenderingContext): Water {
@@ -31,20 +31,8 @@ export function createWater(gl: WebGL2RenderingContext): Water {
       gl.uniform3fv(program.at('u_sea'), parseColour(light.sea));
       gl.uniform3fv(program.at('u_unseen'), parseColour(light.unseen));
       gl.uniform3fv(program.at('u_hatch'), parseColour(light.hatch));
-      gl.uniform3fv(program.at('u_stipple'), parseColour(light.hatch));
-      gl.uniform2f(program.at('u_halfPx'), view.widthPx / 2, view.heightPx / 2);
       gl.uniform1f(program.at('u_devicePx'), 1 / devicePixelRatio);
-      const bearing = (view.bearing * Math.PI) / 180;
-      const [cos, sin] = [Math.cos(bearing), Math.sin(bearing)];
-      gl.uniformMatrix2fv(program.at('u_toEarth'), false, [cos, -sin, sin, cos]);
-      const apart = 2 ** (view.zoom - Math.floor(view.zoom));
-      const [lineStep, dotStep] = [LINE_STEP_PX * apart, DOT_STEP_PX * apart];
-      const [east, south] = [view.x * worldPx(view), view.y * worldPx(view)];
-      gl.uniform1f(program.at('u_between'), apart - 1);
-      gl.uniform1f(program.at('u_lineStep'), lineStep);
-      gl.uniform1f(program.at('u_linePhase'), ((east + south) / Math.SQRT2) % lineStep);
-      gl.uniform1f(program.at('u_dotStep'), dotStep);
-      gl.uniform2f(program.at('u_dotPhase'), east % dotStep, -(south % dotStep));
+      setPattern(gl, program, view);
       gl.disable(gl.BLEND);
       gl.drawArrays(gl.TRIANGLES, 0, 3);
       gl.enable(gl.BLEND);
@@ -55,4 +43,18 @@ export function createWater(gl: WebGL2RenderingContext): Water {
       gl.deleteVertexArray(noAttributes);
     },
   };
+}
+
+function setPattern(gl: WebGL2RenderingContext, program: Program, view: View): void {
+  const bearing = (view.bearing * Math.PI) / 180;
+  const [cos, sin] = [Math.cos(bearing), Math.sin(bearing)];
+  gl.uniform2f(program.at('u_halfPx'), view.widthPx / 2, view.heightPx / 2);
+  gl.uniformMatrix2fv(program.at('u_toEarth'), false, [cos, -sin, sin, cos]);
+  gl.uniform1f(program.at('u_between'), 2 ** (view.zoom - Math.floor(view.zoom)) - 1);
+  const lines = LINES_PER_WORLD * 2 ** Math.floor(view.zoom);
+  const dots = DOTS_PER_WORLD * 2 ** Math.floor(view.zoom);
+  gl.uniform1f(program.at('u_linePx'), worldPx(view) / Math.SQRT2 / lines);
+  gl.uniform1f(program.at('u_linesAtCentre'), ((view.x + view.y) * lines) % 2);
+  gl.uniform1f(program.at('u_dotPx'), worldPx(view) / dots);
+  gl.uniform2f(program.at('u_dotsAtCentre'), (view.x * dots) % 2, -((view.y * dots) % 2));
 }
