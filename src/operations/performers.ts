@@ -4,12 +4,14 @@ import {
   type OperationInput,
   type OperationName,
 } from '../contract/operations.ts';
-import { settings } from '../contract/values.ts';
+import { settings, type WatchArea } from '../contract/values.ts';
+import { Problem } from '../problems/problem.ts';
 import type { Archive } from '../store/archive.ts';
 import { findBlocks } from '../store/blocks.ts';
 import { countPasses, listPasses, removeDemonstration, removePass } from '../store/passes.ts';
 import { keepSetting, readSetting } from '../store/settings.ts';
 import { keepWatchArea, listWatchAreas, removeWatchArea } from '../store/watch-areas.ts';
+import { formatPosition } from '../wind/words.ts';
 import type { Loader } from '../workers/start-loader.ts';
 import type { Coastline } from './coastline.ts';
 import { listDemonstrationFiles, readDemonstrationWatch } from './demonstration.ts';
@@ -27,7 +29,10 @@ export interface DeskParts {
 }
 
 type Performers = {
-  [Name in OperationName]: (parts: DeskParts, input: OperationInput<Name>) => OperationAnswer<Name>;
+  [Name in OperationName]: (
+    parts: DeskParts,
+    input: OperationInput<Name>,
+  ) => OperationAnswer<Name> | Promise<OperationAnswer<Name>>;
 };
 
 /** How each operation of the contract is done. */
@@ -54,7 +59,8 @@ export const performers: Performers = {
   readCell: ({ archive, coastline }, place) => describeCell(archive, coastline.fine(), place),
   readWatch: ({ readWatch }, input) => readWatch(input),
   listWatchAreas: ({ archive }) => ({ areas: listWatchAreas(archive) }),
-  keepWatchArea: ({ archive, news }, area) => {
+  keepWatchArea: async ({ archive, news }, area) => {
+    await refuseCrossing(area.ring);
     const kept = keepWatchArea(archive, area);
     news.say({ kind: 'areas changed' });
     return kept;
@@ -100,3 +106,16 @@ export const performers: Performers = {
     return {};
   },
 };
+
+/** An area whose edges cross has no certain inside. The geometry library is large, so it is read only when needed. */
+async function refuseCrossing(ring: WatchArea['ring']): Promise<void> {
+  const { findCrossing } = await import('../geometry/find-crossing.ts');
+  const crossing = findCrossing(ring);
+  if (crossing === null) return;
+  const place = { part: `at ${formatPosition(...crossing)}` };
+  throw new Problem(
+    'bad-input',
+    'The edges of this area cross, so its inside is in doubt. Draw it without a crossing.',
+    place,
+  );
+}

@@ -151,6 +151,18 @@ describe.each(carriers)('through $name', ({ open }) => {
     expect(await ask('listWatchAreas', {})).toEqual({ areas: [] });
   });
 
+  test('refuses a watch area whose edges cross, and says where', async () => {
+    const ring = [
+      [178, -2],
+      [-178, 2],
+      [-178, -2],
+      [178, 2],
+    ];
+    const input = JSON.stringify({ name: 'Bow tie', ring });
+    const problem = await readProblem(await post(`${routes.ask}keepWatchArea`, input));
+    expect(problem).toMatchObject({ code: 'bad-input', where: 'at 00°00′N 180°00′W' });
+  });
+
   test('leaves a task that has ended alone', async () => {
     expect(await ask('stopTask', { taskId: 99 })).toEqual({});
   });
