@@ -68,7 +68,7 @@ export function createDial(actions: DialActions): { element: SVGSVGElement; show
   drag(element, face, (age, lastAge) => {
     const step = Math.round(shortWay(age - lastAge) / DRAG_STEP_MS) * DRAG_STEP_MS;
     if (step !== 0) actions.setNow(Math.round((state.nowMs + step) / 60_000) * 60_000);
-    return step === 0 ? lastAge : age;
+    return lastAge + step;
   });
   drag(element, knob, (age) => {
     actions.setWindowHours(Math.max(0.25, Math.round((age / HOUR_MS) * 4) / 4));
