@@ -145,7 +145,7 @@ function directionWords(directionFrom: number): string {
 }
 
 function describeFlags(card: CellCard): string {
-  return card.checksRain ? describeSetFlags(card) : `${describeSetFlags(card)}; this file never checks rain`;
+  return card.checksRain ? describeSetFlags(card) : `${describeSetFlags(card)}; rain was perhaps never checked`;
 }
 
 function describeSetFlags(card: CellCard): string {

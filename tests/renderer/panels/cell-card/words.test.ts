@@ -62,8 +62,8 @@ test('calls 17.2 m/s near gale: 33.43 kt rounds to 33', () => {
   expect(headOf({ ...windCell, speedMs: 17.2 }, 'knots').title).toBe('Near gale, Beaufort 7');
 });
 
-test('says that no flag is set, and that this file never checks rain', () => {
-  expect(line(windCell, 'Flags')).toBe('none set; this file never checks rain');
+test('says that no flag is set, and that rain was perhaps never checked', () => {
+  expect(line(windCell, 'Flags')).toBe('none set; rain was perhaps never checked');
 });
 
 test('never calls unknown or absent flags none', () => {
