@@ -26,7 +26,7 @@ test('tells all of the cell that was clicked, and does not cover it', async ({ p
     'Storm, Beaufort 10',
     '28.0 m/s from 270° west',
     '2031-03-02 06:00:16 UTC, 1 h ago',
-    'none set; this file never checks rain',
+    'none set; rain was perhaps never checked',
     '54 kt (28.0 m/s) from 090° east, 25 % likely',
     '54 kt (28.0 m/s) from 270° west, 75 % likely chosen',
     'storm.bufr, row 5, cell 7',
@@ -44,7 +44,7 @@ test('tells all of the cell that was clicked, and does not cover it', async ({ p
 
 test('names the flags of a cell in words', async ({ page }) => {
   await clickCell(page, 7, 6);
-  await expect(card(page)).toContainText('land in the cell; this file never checks rain');
+  await expect(card(page)).toContainText('land in the cell; rain was perhaps never checked');
   await expect(card(page)).toContainText('Land lies in this cell');
 });
 
