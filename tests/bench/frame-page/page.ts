@@ -8,34 +8,41 @@ import { createSightLayer } from '../../../renderer/layers/sight/sight-layer.ts'
 import { type BaseMap, createBaseMap } from '../../../renderer/map/base-map.ts';
 import { LOWEST_LAND_LAYER } from '../../../renderer/map/map-style.ts';
 import { lights } from '../../../renderer/state/lights.ts';
+import type { DrawBlock } from '../../../src/contract/packed-swath.ts';
 import { showEverything } from '../../../src/wind/switches.ts';
 import { toWholeKnots } from '../../../src/wind/units.ts';
-import { inventCells } from './invented-cells.ts';
+import { inventPass, scatterCells } from './invented-cells.ts';
 
-const TRIES = 11;
 const WARM_UPS = 2;
 const light = lights.day;
 
-/** What may be drawn over the empty map. */
-type Subject = 'nothing' | 'barbs' | 'symbols' | 'sight' | 'chart';
+/** What is drawn over the empty map, and of how many cells. */
+export interface Subject {
+  /**
+   * Nothing; every barb of ours; the same as icons of the map library's symbol layer; or the chart as it is used, thinned
+   * barbs over the water.
+   */
+  draws: 'nothing' | 'barbs' | 'symbols' | 'chart';
+  cells: number;
+}
 
 /**
- * Frames of maps of so many cells, side by side: nothing on them, every barb of ours, the same as icons of the map
- * library's symbol layer, or the chart as it is used, with thinned barbs over the water. The maps take turns, so that
- * whatever else the machine does falls on all of them. Gives the median time of each, milliseconds.
+ * Median times of a frame of each subject, milliseconds, from its start until its pixels can be read; after a small pan
+ * where `isPanning`, else of the same view again. The maps stand side by side and take turns, so that whatever else the
+ * machine does falls on all of them.
  */
-export async function timeFrames(count: number, subjects: readonly Subject[]): Promise<number[]> {
+export async function timeFrames(subjects: readonly Subject[], tries: number, isPanning: boolean): Promise<number[]> {
   const places = subjects.map(() => document.body.appendChild(document.createElement('div')));
   const bases = places.map(openMap);
   try {
     await Promise.all(bases.map((base) => base.map.once('idle')));
-    for (const [i, base] of bases.entries()) await cover(base, count, subjects[i]);
+    for (const [i, base] of bases.entries()) await cover(base, subjects[i]);
     const times = bases.map((): number[] => []);
-    for (let n = 0; n < WARM_UPS + TRIES; n++) {
-      for (const [i, base] of bases.entries()) times[i].push(frameMs(base.map, n * 0.05));
+    for (let n = 0; n < WARM_UPS + tries; n++) {
+      for (const [i, base] of bases.entries()) times[i].push(frameMs(base.map, isPanning ? n * 0.05 : 0));
     }
     for (const base of bases) checkGraphics(base.map);
-    return times.map((tries) => tries.slice(WARM_UPS).sort((a, b) => a - b)[TRIES >> 1]);
+    return times.map((all) => all.slice(WARM_UPS).sort((a, b) => a - b)[tries >> 1]);
   } finally {
     for (const base of bases) base.remove();
     for (const place of places) place.remove();
@@ -50,30 +57,27 @@ function openMap(place: HTMLElement): BaseMap {
   return createBaseMap(place, light, camera, (scale) => `coastline/land-${scale}.json`, failed);
 }
 
-async function cover({ map, view }: BaseMap, count: number, subject: Subject): Promise<void> {
-  const { cells, kinds, winds } = windsOf(count);
-  if (subject === 'barbs') {
+async function cover({ map, view }: BaseMap, { draws, cells: count }: Subject): Promise<void> {
+  if (draws === 'barbs') {
     const barbs = createBarbLayer(view, light, false);
-    barbs.setWinds(winds);
+    barbs.setWinds(windsOf(scatterCells(count)).winds);
     map.addLayer(barbs);
     if (barbs.drawnIn(view()).length < count / 2) throw new Error('barbs were left out');
   }
-  if (subject === 'symbols') addSymbols(map, count);
-  if (subject === 'chart' || subject === 'sight') {
+  if (draws === 'symbols') addSymbols(map, scatterCells(count));
+  if (draws === 'chart') {
+    const { cells, kinds, winds } = windsOf(inventPass(count));
     const sight = createSightLayer(view, light);
-    sight.setSight(cells, kinds);
-    map.addLayer(sight, LOWEST_LAND_LAYER);
-  }
-  if (subject === 'chart') {
     const barbs = createBarbLayer(view, light);
+    sight.setSight(cells, kinds);
     barbs.setWinds(winds);
+    map.addLayer(sight, LOWEST_LAND_LAYER);
     map.addLayer(barbs);
   }
   map.triggerRepaint();
   await map.once('idle');
 }
 
-/** The time of a frame after a small pan, from its start until its pixels can be read. */
 function frameMs(map: MapLibreMap, lon: number): number {
   const gl = graphicsOf(map);
   map.jumpTo({ center: [lon, 20] });
@@ -83,8 +87,8 @@ function frameMs(map: MapLibreMap, lon: number): number {
   return performance.now() - startMs;
 }
 
-function windsOf(count: number) {
-  const cells = joinBlocks(inventCells(count));
+function windsOf(blocks: DrawBlock[]) {
+  const cells = joinBlocks(blocks);
   const window = { fromMs: 0, toMs: Number.MAX_SAFE_INTEGER };
   const kinds = sortCells(cells, { switches: showEverything(), hiddenPassIds: [], window });
   return { cells, kinds, winds: { cells, ...thinWinds(cells, sortWinds(cells), kinds) } };
@@ -100,9 +104,9 @@ function graphicsOf(map: MapLibreMap): WebGL2RenderingContext {
   return map.getCanvas().getContext('webgl2') as WebGL2RenderingContext;
 }
 
-function addSymbols(map: MapLibreMap, count: number): void {
+function addSymbols(map: MapLibreMap, blocks: DrawBlock[]): void {
   const drawn = new Set<number>();
-  const features = inventCells(count).flatMap((block) =>
+  const features = blocks.flatMap((block) =>
     Array.from({ length: block.cells }, (_, cell) => {
       const fives = fivesOf(toWholeKnots(block.speedMs[cell]));
       if (!drawn.has(fives)) map.addImage(`barb-${fives}`, drawIcon(fives));
