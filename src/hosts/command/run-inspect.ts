@@ -10,6 +10,7 @@ import type { Words } from './words.ts';
 export function runInspect({ given, isJson }: Words, terminal: Terminal): number {
   if (given.length === 0) {
     terminal.stderr.write('Name the files to inspect: crosstrack inspect FILE... [--json]\n');
+    if (isJson) terminal.stdout.write('[]\n');
     return 2;
   }
   const files = inspectFiles(given);

@@ -55,6 +55,10 @@ test('inspects files as one JSON array and ends with 0 when every file gave cell
   ]);
 });
 
+test('prints an empty array and ends with 2 when no file was named', async () => {
+  expect(await run('inspect', '--json')).toMatchObject({ code: 2, out: '[]\n' });
+});
+
 test('still prints the whole array, and ends with 1, when a file gave no cells', async () => {
   const { code, out } = await run('inspect', '--json', inFolder('notes.txt'), inFolder('wind.nc'), inFolder('missing'));
   expect(code).toBe(1);
