@@ -60,10 +60,12 @@ export function reachOf(view: View, growPx = 0): Reach {
   return { west: Math.min(...xs), east: Math.max(...xs), north: Math.min(...ys), south: Math.max(...ys) };
 }
 
-/** Whether one box holds another; one a world wide or more holds every x. */
+/** Whether one box holds another, in whatever copy of the world; one a world wide or more holds every x. */
 export function holdsReach(outer: Reach, inner: Reach): boolean {
-  const isHeldAcross = outer.east - outer.west >= 1 || (inner.west >= outer.west && inner.east <= outer.east);
-  return isHeldAcross && inner.north >= outer.north && inner.south <= outer.south;
+  const copy = Math.round((outer.west + outer.east - inner.west - inner.east) / 2);
+  const isHeldAcross = inner.west + copy >= outer.west && inner.east + copy <= outer.east;
+  const isWorldWide = outer.east - outer.west >= 1;
+  return (isHeldAcross || isWorldWide) && inner.north >= outer.north && inner.south <= outer.south;
 }
 
 /**
