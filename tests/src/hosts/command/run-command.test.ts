@@ -121,7 +121,7 @@ test.each([
   ['no command', []],
   ['a command there is none of', ['draw']],
   ['an inherited name', ['toString']],
-  ['nothing to inspect', ['inspect', '--json']],
+  ['nothing to inspect', ['inspect']],
   ['an option there is none of', ['inspect', '--loud', 'x']],
   ['an option without its value', ['passes', '--archive']],
   ['nothing to load', ['load']],
