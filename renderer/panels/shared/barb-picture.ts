@@ -5,12 +5,13 @@ import { draw } from './make.ts';
 const SHAFT_PX = 21;
 const FEATHER_PX = 8;
 const STEP_PX = 3.6;
+const CALM_CIRCLE = 'M 8 0 a 3 3 0 1 0 6 0 a 3 3 0 1 0 -6 0';
 
 /** A barb as keys show it: wind from the west at a northern latitude, in the ink and weight of its class. */
 export function barbPicture(beaufort: number): SVGSVGElement {
   const ink = inkOfBeaufort[beaufort];
   const knots = Math.round(typicalKnots(beaufort) / 5) * 5;
-  const { lines, pennants } = barbLines(knots);
+  const { lines, pennants } = beaufort === 0 ? { lines: CALM_CIRCLE, pennants: '' } : barbLines(knots);
   return draw(
     'svg',
     { class: 'barb-picture', viewBox: '-2 -10 28 14', width: 28, height: 14, 'aria-hidden': 'true' },
@@ -21,10 +22,9 @@ export function barbPicture(beaufort: number): SVGSVGElement {
 
 /**
  * Strokes and pennants of so many knots, a multiple of 5: shaft along x from the position at (SHAFT_PX, 0) to the end the
- * wind comes from at 0; feathers on the low-pressure side of a northern west wind, which is up (north).
+ * wind comes from at 0, bare for 1 and 2 kt; feathers on the low-pressure side of a northern west wind, which is up (north).
  */
 export function barbLines(knots: number): { lines: string; pennants: string } {
-  if (knots < 5) return { lines: 'M 8 0 a 3 3 0 1 0 6 0 a 3 3 0 1 0 -6 0', pennants: '' };
   let lines = `M ${SHAFT_PX} 0 H 0`;
   let pennants = '';
   let left = knots;

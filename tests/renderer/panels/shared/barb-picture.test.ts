@@ -15,6 +15,6 @@ test.each([
   expect([pennants(outline), feathers(lines)]).toEqual([pennantCount, featherCount]);
 });
 
-test('draws calm as a circle', () => {
-  expect(barbLines(0).lines).toContain('a 3 3');
+test('draws a bare shaft for the 1 and 2 kt that are nearest to no feather', () => {
+  expect(barbLines(0)).toEqual({ lines: 'M 21 0 H 0', pennants: '' });
 });
