@@ -121,15 +121,19 @@ function keepGraticule(map: MapLibreMap): (view: View) => void {
     if (drawn && drawn.step === step && isNear(drawn.view, view)) return;
     drawn = { step, view };
     const { meridians, parallels } = linesIn(view, step, GRATICULE_REACH * Math.max(view.widthPx, view.heightPx));
-    const [west, east] = [Math.min(...meridians), Math.max(...meridians)];
+    const west = meridians[0];
+    // The map repeats what is drawn once round the world; twice would be twice as dark.
+    const east = Math.min(west + 360, meridians[meridians.length - 1]);
     const coordinates = [
-      ...meridians.map((lon) => [
-        [lon, -89],
-        [lon, 89],
-      ]),
+      ...meridians
+        .filter((lon) => lon < west + 360)
+        .map((lon) => [
+          [lon, -89],
+          [lon, 89],
+        ]),
       ...parallels.map((lat) => [
-        [west - step, lat],
-        [east + step, lat],
+        [west, lat],
+        [east, lat],
       ]),
     ];
     (map.getSource('graticule') as GeoJSONSource).setData({ type: 'MultiLineString', coordinates });

@@ -60,12 +60,20 @@ export function reachOf(view: View, growPx = 0): Reach {
   return { west: Math.min(...xs), east: Math.max(...xs), north: Math.min(...ys), south: Math.max(...ys) };
 }
 
-/** Whether one box holds another, in whatever copy of the world; one a world wide or more holds every x. */
+/** Whether one box holds another. */
 export function holdsReach(outer: Reach, inner: Reach): boolean {
-  const copy = Math.round((outer.west + outer.east - inner.west - inner.east) / 2);
-  const isHeldAcross = inner.west + copy >= outer.west && inner.east + copy <= outer.east;
-  const isWorldWide = outer.east - outer.west >= 1;
-  return (isHeldAcross || isWorldWide) && inner.north >= outer.north && inner.south <= outer.south;
+  const isHeldAcross = inner.west >= outer.west && inner.east <= outer.east;
+  return isHeldAcross && inner.north >= outer.north && inner.south <= outer.south;
+}
+
+/** The same view in the copy of the world that lies nearest a box. */
+export function nearTo(reach: Reach, view: View): View {
+  return { ...view, x: view.x + Math.round((reach.west + reach.east) / 2 - view.x) };
+}
+
+/** The copies of the world, whole numbers to add to x, in which what lies between two x touches a box. */
+export function copiesTouching(reach: Reach, west: number, east: number): { first: number; last: number } {
+  return { first: Math.ceil(reach.west - east), last: Math.floor(reach.east - west) };
 }
 
 /**
@@ -78,18 +86,6 @@ export function boxOf(view: View): { west: number; south: number; east: number; 
   if (reach.east - reach.west >= 1) return { west: -180, south, east: 180, north };
   return { west: wrap(lonOfMercator(reach.west)), south, east: wrap(lonOfMercator(reach.east)), north };
 }
-
-/** The copies of the world that the view shows: whole numbers to add to a Web Mercator x. */
-export function copiesIn(view: View): number[] {
-  const { west, east } = reachOf(view, COPY_MARGIN_PX + COPY_MARGIN_WORLDS * worldPx(view));
-  const copies: number[] = [];
-  for (let copy = Math.floor(west); copy <= Math.floor(east); copy++) copies.push(copy);
-  return copies;
-}
-
-/** What stands just outside the view may reach into it: a barb by pixels, a cell's footprint by a share of the earth. */
-const COPY_MARGIN_PX = 40;
-const COPY_MARGIN_WORLDS = 0.002;
 
 function cornersOf(view: View, growPx: number): [number, number][] {
   const right = view.widthPx + growPx;

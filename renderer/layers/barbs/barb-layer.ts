@@ -1,8 +1,9 @@
 import type { CustomLayerInterface } from 'maplibre-gl';
-import { copiesIn, reachOf, type View } from '../../map/view.ts';
+import { nearTo, reachOf, type View } from '../../map/view.ts';
 import { inkWeightsPx, type Light } from '../../state/lights.ts';
-import { setCamera, setCopy, withCamera } from '../shared/camera.ts';
+import { setCamera, withCamera } from '../shared/camera.ts';
 import { isInReach } from '../shared/cells.ts';
+import { createQuadIndices } from '../shared/quad-indices.ts';
 import { linkProgram, type Program, parseColour } from '../shared/webgl.ts';
 import barbFragment from './barb.fragment.glsl?raw';
 import barbVertex from './barb.vertex.glsl?raw';
@@ -68,7 +69,7 @@ export function createBarbLayer(view: () => View, light: Light, isThinned = true
       if (!laidOut || !drawing) return;
       if (given !== laidOut) drawing.texture.fill(laidOut.list.words);
       given = laidOut;
-      drawing.draw(laidOut.list.runs, now, inks);
+      drawing.draw(laidOut.list.runs, nearTo(laidOut.reach, now), inks);
     },
   };
 }
@@ -84,47 +85,52 @@ function createDrawing(gl: WebGL2RenderingContext): Drawing {
   const marks = linkProgram(gl, withCamera(markVertex), markFragment);
   const texture = createWindTexture(gl);
   const noAttributes = gl.createVertexArray();
+  const quads = createQuadIndices(gl);
 
   function begin(program: Program, view: View, inks: number[]): void {
     gl.useProgram(program.program);
     setCamera(gl, program, view);
     gl.uniform1f(program.at('u_devicePx'), 1 / devicePixelRatio);
     gl.uniform1f(program.at('u_size'), sizeAt(view.zoom));
+    gl.uniform1f(program.at('u_reach'), MARK_REACH_PX * sizeAt(view.zoom));
     gl.uniform1fv(program.at('u_weight'), inkWeightsPx);
     gl.uniform3fv(program.at('u_ink'), inks);
     gl.uniform1i(program.at('u_winds'), 0);
   }
 
-  function drawRun(program: Program, run: Run): void {
-    gl.uniform1i(program.at('u_first'), run.first);
-    if ('mark' in run.shape) {
-      gl.uniform1i(program.at('u_mark'), run.shape.mark);
-      gl.drawArrays(gl.TRIANGLES, 0, run.count * 6);
+  function drawRun({ shape, first, count }: Run): void {
+    const program = 'mark' in shape ? marks : barbs;
+    gl.uniform1i(program.at('u_first'), first);
+    if ('mark' in shape) {
+      gl.uniform1i(program.at('u_mark'), shape.mark);
+      quads.draw(0, count);
       return;
     }
-    const { pieces, pennants } = piecesOf(run.shape.fives);
-    gl.uniform4fv(program.at('u_piece'), pieces);
-    gl.uniform1i(program.at('u_pieces'), pieces.length / 4);
-    gl.uniform1i(program.at('u_pennants'), pennants);
-    gl.drawArrays(gl.TRIANGLES, 0, run.count * 6 * (pieces.length / 4));
+    const { pennants, strokes } = barbShape(Math.min(shape.fives, MOST_FIVES));
+    for (const [pieces, baseHalf] of [
+      [pennants, PENNANT_BASE_PX / 2],
+      [strokes, 0],
+    ] as const) {
+      gl.uniform1f(program.at('u_baseHalf'), baseHalf);
+      for (const { from, to } of pieces) {
+        gl.uniform4f(program.at('u_piece'), ...from, ...to);
+        quads.draw(0, count);
+      }
+    }
   }
 
   return {
     texture,
     draw(runs, view, inks) {
       gl.bindVertexArray(noAttributes);
+      quads.bind(runs.reduce((most, { count }) => Math.max(most, count), 0));
       gl.activeTexture(gl.TEXTURE0);
       texture.bind();
       gl.enable(gl.BLEND);
       gl.blendFunc(gl.ONE, gl.ONE_MINUS_SRC_ALPHA);
       for (const program of [marks, barbs]) {
         begin(program, view, inks);
-        gl.uniform1f(program.at('u_reach'), MARK_REACH_PX * sizeAt(view.zoom));
-        gl.uniform1f(program.at('u_pennantHalf'), PENNANT_BASE_PX / 2);
-        for (const copy of copiesIn(view)) {
-          setCopy(gl, program, copy);
-          for (const run of runs) if ('mark' in run.shape === (program === marks)) drawRun(program, run);
-        }
+        for (const run of runs) if ('mark' in run.shape === (program === marks)) drawRun(run);
       }
       gl.bindVertexArray(null);
     },
@@ -132,6 +138,7 @@ function createDrawing(gl: WebGL2RenderingContext): Drawing {
       gl.deleteProgram(barbs.program);
       gl.deleteProgram(marks.program);
       gl.deleteVertexArray(noAttributes);
+      quads.remove();
       texture.remove();
     },
   };
@@ -140,17 +147,4 @@ function createDrawing(gl: WebGL2RenderingContext): Drawing {
 /** Barbs grow a little once cells stand far apart: 1 up to zoom 6, 1.35 from zoom 8. */
 function sizeAt(zoom: number): number {
   return 1 + 0.35 * Math.max(0, Math.min(1, (zoom - 6) / 2));
-}
-
-const knownPieces = new Map<number, { pieces: Float32Array; pennants: number }>();
-
-/** A barb's pennants and strokes as x, y of one end and x, y of the other. */
-function piecesOf(fives: number): { pieces: Float32Array; pennants: number } {
-  const known = knownPieces.get(fives);
-  if (known) return known;
-  const { strokes, pennants } = barbShape(Math.min(fives, MOST_FIVES));
-  const pieces = Float32Array.from([...pennants, ...strokes].flatMap(({ from, to }) => [...from, ...to]));
-  const made = { pieces, pennants: pennants.length };
-  knownPieces.set(fives, made);
-  return made;
 }

@@ -1,6 +1,7 @@
 import { beaufortOfKnots } from '../../../src/wind/beaufort.ts';
 import { doubtKinds, doubtMask } from '../../../src/wind/flags.ts';
 import { toWholeKnots } from '../../../src/wind/units.ts';
+import { copiesTouching, type Reach } from '../../map/view.ts';
 import { inkOfBeaufort } from '../../state/lights.ts';
 import { type Cells, directionOf, flagsOf, isSouth } from '../shared/cells.ts';
 import { fivesOf } from './barb-shape.ts';
@@ -31,24 +32,39 @@ export interface DrawingList {
 /**
  * Lays out winds to draw: marks first, then barbs from weak to strong, so that the strongest lies on top. `drawn` and
  * `hidden` are cells; a hidden wind leaves a dot in the ink of its class, since it is neither calm nor unseen water.
+ * Each is laid out once in every copy of the world that lies in reach.
  */
-export function listDrawing(cells: Cells, drawn: readonly number[], hidden: readonly number[]): DrawingList {
-  const entries: number[] = [];
-  const shapes: number[] = [];
-  for (const cell of hidden) {
-    entries.push(cell);
-    shapes.push(marks.hidden);
-  }
+export function listDrawing(
+  cells: Cells,
+  drawn: readonly number[],
+  hidden: readonly number[],
+  reach: Reach,
+): DrawingList {
+  const entries: Entries = { cells: [], xs: [], shapes: [] };
+  for (const cell of hidden) addEntry(entries, cells, cell, marks.hidden, reach);
   for (const cell of drawn) {
-    for (const kind of doubtKinds) {
-      if ((flagsOf(cells, cell) & doubtMask[kind]) === 0) continue;
-      entries.push(cell);
-      shapes.push(marks[kind]);
-    }
-    entries.push(cell);
-    shapes.push(shapeOf(cells, cell));
+    const flags = flagsOf(cells, cell);
+    for (const kind of doubtKinds) if (flags & doubtMask[kind]) addEntry(entries, cells, cell, marks[kind], reach);
+    addEntry(entries, cells, cell, shapeOf(cells, cell), reach);
   }
-  return layOut(cells, entries, shapes);
+  return layOut(cells, entries);
+}
+
+/** Things to draw, column by column: the cell, its x in the copy of the world it is drawn in, and its shape. */
+interface Entries {
+  cells: number[];
+  xs: number[];
+  shapes: number[];
+}
+
+function addEntry(entries: Entries, cells: Cells, cell: number, shape: number, reach: Reach): void {
+  const x = cells.x[cell];
+  const { first, last } = copiesTouching(reach, x, x);
+  for (let copy = first; copy <= last; copy++) {
+    entries.cells.push(cell);
+    entries.xs.push(x + copy);
+    entries.shapes.push(shape);
+  }
 }
 
 function shapeOf(cells: Cells, cell: number): number {
@@ -57,7 +73,7 @@ function shapeOf(cells: Cells, cell: number): number {
   return Number.isNaN(directionOf(cells, cell)) ? marks.noDirection : FIRST_BARB + fivesOf(wholeKnots);
 }
 
-function layOut(cells: Cells, entries: number[], shapes: number[]): DrawingList {
+function layOut(cells: Cells, { cells: cellOf, xs, shapes }: Entries): DrawingList {
   const counts: number[] = [];
   for (const shape of shapes) counts[shape] = (counts[shape] ?? 0) + 1;
   const runs: Run[] = [];
@@ -68,11 +84,12 @@ function layOut(cells: Cells, entries: number[], shapes: number[]): DrawingList 
     nextOf[shape] = first;
     first += count;
   });
-  const words = new Uint32Array(entries.length * WORDS_PER_ENTRY);
+  const words = new Uint32Array(shapes.length * WORDS_PER_ENTRY);
   const floats = new Float32Array(words.buffer);
-  entries.forEach((cell, i) => {
-    const at = nextOf[shapes[i]]++ * WORDS_PER_ENTRY;
-    floats[at] = cells.x[cell];
+  shapes.forEach((shape, i) => {
+    const cell = cellOf[i];
+    const at = nextOf[shape]++ * WORDS_PER_ENTRY;
+    floats[at] = xs[i];
     floats[at + 1] = cells.y[cell];
     words[at + 2] = packDirection(directionOf(cells, cell));
     words[at + 3] = inkOfBeaufort[beaufortOfKnots(toWholeKnots(cells.speedMs[cell]))] | (isSouth(cells, cell) ? 8 : 0);

@@ -1,4 +1,4 @@
-import { holdsReach, type Reach, reachOf, type View, worldPx } from '../../map/view.ts';
+import { holdsReach, nearTo, type Reach, reachOf, type View, worldPx } from '../../map/view.ts';
 import { type Cells, directionOf, isInReach, isSouth } from '../shared/cells.ts';
 import { levelFor, NO_LEVEL } from './bins.ts';
 import { type DrawingList, listDrawing } from './drawing-list.ts';
@@ -49,7 +49,7 @@ export function layOutWinds(winds: Winds, view: View, isThinned: boolean): Layou
   const reach = reachOf(view, LAID_OUT_PX);
   const strongest = drawnAt(cells, shown, scale.level, reach);
   const drawn = scale.worldPx === 0 ? strongest : keepClear(cells, strongest, scale.worldPx);
-  const list = listDrawing(cells, drawn, drawnAt(cells, hidden, scale.level, reach));
+  const list = listDrawing(cells, drawn, drawnAt(cells, hidden, scale.level, reach), reach);
   return { winds, scale, reach, drawn, list };
 }
 
@@ -59,7 +59,7 @@ export function isLaidOutFor(layout: Layout, winds: Winds, view: View, isThinned
   if (layout.winds !== winds || layout.scale.level !== scale.level || layout.scale.worldPx !== scale.worldPx) {
     return false;
   }
-  return holdsReach(layout.reach, reachOf(view, USED_PX));
+  return holdsReach(layout.reach, reachOf(nearTo(layout.reach, view), USED_PX));
 }
 
 function scaleFor(view: View, isThinned: boolean): Scale {

@@ -8,18 +8,13 @@ export function withCamera(vertexSource: string): string {
   return `${vertexSource.slice(0, firstLineEnd)}precision highp float;\n${camera}${vertexSource.slice(firstLineEnd)}`;
 }
 
-/** Sets the camera of a program in use to a view; `setCopy` then says which copy of the world is drawn. */
+/** Sets the camera of a program in use to a view. */
 export function setCamera(gl: WebGL2RenderingContext, program: Program, view: View): void {
   const bearing = (view.bearing * Math.PI) / 180;
   gl.uniform2f(program.at('u_centre'), view.x, view.y);
   gl.uniform1f(program.at('u_worldPx'), worldPx(view));
   gl.uniformMatrix2fv(program.at('u_turn'), false, turnOf(bearing));
   gl.uniform2f(program.at('u_clipPerPx'), 2 / view.widthPx, 2 / view.heightPx);
-}
-
-/** Draws the copy of the world so many worlds to the east. */
-export function setCopy(gl: WebGL2RenderingContext, program: Program, copy: number): void {
-  gl.uniform1f(program.at('u_copy'), copy);
 }
 
 /** Columns of the matrix that takes east and north to right and up, for a bearing in radians. */

@@ -1,5 +1,5 @@
 import type { DrawBlock } from '../../../src/contract/packed-swath.ts';
-import type { Reach } from '../../map/view.ts';
+import { copiesTouching, type Reach } from '../../map/view.ts';
 import type { Cells } from '../shared/cells.ts';
 import { NOT_SHOWN, SHOWN_WITHOUT_WIND } from '../shared/shown.ts';
 import { FloatList } from './float-list.ts';
@@ -24,6 +24,7 @@ const ENLARGED = 1.02;
 /**
  * The footprints of all shown cells that lie in reach. Up to `most` by `most` neighbours that were seen alike become one
  * quad; where they differ, or are no neighbours, they are taken apart, so nothing unseen is covered.
+ * Each lies in every copy of the world that is in reach.
  */
 export function tileFootprints(cells: Cells, kinds: Uint8Array, most: number, reach: Reach): FootprintTiles {
   const noWind = new FloatList();
@@ -108,11 +109,15 @@ function addQuad(block: DrawBlock, { first, rows, columns }: Patch, reach: Reach
   writeCorner(block, lastRow, 1, -1, corners, 4);
   writeCorner(block, lastRow + columns - 1, 1, 1, corners, 6);
   for (let i = 2; i < 8; i += 2) corners[i] -= Math.round(corners[i] - corners[0]);
-  if (!touches(boundsOfCorners(), reach)) return;
+  const bounds = boundsOfCorners();
+  if (bounds.south < reach.north || bounds.north > reach.south) return;
+  const { first: firstCopy, last: lastCopy } = copiesTouching(reach, bounds.west, bounds.east);
   const middleX = (corners[0] + corners[2] + corners[4] + corners[6]) / 4;
   const middleY = (corners[1] + corners[3] + corners[5] + corners[7]) / 4;
-  for (let i = 0; i < 8; i += 2) {
-    quads.add(middleX + (corners[i] - middleX) * ENLARGED, middleY + (corners[i + 1] - middleY) * ENLARGED);
+  for (let copy = firstCopy; copy <= lastCopy; copy++) {
+    for (let i = 0; i < 8; i += 2) {
+      quads.add(copy + middleX + (corners[i] - middleX) * ENLARGED, middleY + (corners[i + 1] - middleY) * ENLARGED);
+    }
   }
 }
 

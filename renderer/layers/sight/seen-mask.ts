@@ -1,5 +1,6 @@
-import { copiesIn, type View } from '../../map/view.ts';
-import { setCamera, setCopy, withCamera } from '../shared/camera.ts';
+import type { View } from '../../map/view.ts';
+import { setCamera, withCamera } from '../shared/camera.ts';
+import { createQuadIndices } from '../shared/quad-indices.ts';
 import { linkProgram } from '../shared/webgl.ts';
 import type { FootprintTiles } from './footprint-tiles.ts';
 import maskFragment from './mask.fragment.glsl?raw';
@@ -14,8 +15,6 @@ export interface SeenMask {
 }
 
 const FLOATS_PER_QUAD = 8;
-/** Corners of a quad in the order of its two triangles. */
-const QUAD = [0, 1, 2, 2, 1, 3];
 
 /** A mask on the graphics card; it takes the size of the drawing buffer. */
 export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
@@ -23,16 +22,14 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
   const texture = gl.createTexture();
   const framebuffer = gl.createFramebuffer();
   const corners = gl.createBuffer();
-  const indices = gl.createBuffer();
+  const quads = createQuadIndices(gl);
   const layout = gl.createVertexArray();
   let size = { width: 0, height: 0 };
-  let indexedQuads = 0;
   let noWindQuads = 0;
   let windQuads = 0;
 
   gl.bindVertexArray(layout);
   gl.bindBuffer(gl.ARRAY_BUFFER, corners);
-  gl.bindBuffer(gl.ELEMENT_ARRAY_BUFFER, indices);
   const mercator = gl.getAttribLocation(program.program, 'a_mercator');
   gl.enableVertexAttribArray(mercator);
   gl.vertexAttribPointer(mercator, 2, gl.FLOAT, false, 0, 0);
@@ -54,14 +51,10 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
   function drawQuads(view: View): void {
     gl.useProgram(program.program);
     setCamera(gl, program, view);
-    for (const copy of copiesIn(view)) {
-      setCopy(gl, program, copy);
-      gl.uniform1f(program.at('u_noWind'), 1);
-      gl.drawElements(gl.TRIANGLES, noWindQuads * QUAD.length, gl.UNSIGNED_INT, 0);
-      gl.uniform1f(program.at('u_noWind'), 0);
-      const skipped = noWindQuads * QUAD.length * Uint32Array.BYTES_PER_ELEMENT;
-      gl.drawElements(gl.TRIANGLES, windQuads * QUAD.length, gl.UNSIGNED_INT, skipped);
-    }
+    gl.uniform1f(program.at('u_noWind'), 1);
+    quads.draw(0, noWindQuads);
+    gl.uniform1f(program.at('u_noWind'), 0);
+    quads.draw(noWindQuads, windQuads);
   }
 
   return {
@@ -75,10 +68,7 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
       gl.bindVertexArray(layout);
       gl.bindBuffer(gl.ARRAY_BUFFER, corners);
       gl.bufferData(gl.ARRAY_BUFFER, floats, gl.DYNAMIC_DRAW);
-      if (noWindQuads + windQuads > indexedQuads) {
-        indexedQuads = Math.max(noWindQuads + windQuads, indexedQuads * 2);
-        gl.bufferData(gl.ELEMENT_ARRAY_BUFFER, indicesFor(indexedQuads), gl.STATIC_DRAW);
-      }
+      quads.bind(noWindQuads + windQuads);
       gl.bindVertexArray(null);
     },
     draw(view) {
@@ -103,14 +93,8 @@ export function createSeenMask(gl: WebGL2RenderingContext): SeenMask {
       gl.deleteTexture(texture);
       gl.deleteFramebuffer(framebuffer);
       gl.deleteBuffer(corners);
-      gl.deleteBuffer(indices);
+      quads.remove();
       gl.deleteVertexArray(layout);
     },
   };
-}
-
-function indicesFor(quads: number): Uint32Array<ArrayBuffer> {
-  const indices = new Uint32Array(quads * QUAD.length);
-  for (let i = 0; i < indices.length; i++) indices[i] = Math.floor(i / QUAD.length) * 4 + QUAD[i % QUAD.length];
-  return indices;
 }

@@ -1,5 +1,5 @@
-import type { CustomLayerInterface } from 'maplibre-gl';
-import { holdsReach, type Reach, reachOf, type View } from '../../map/view.ts';
+import type { CustomLayerInterface, Map as MapLibreMap } from 'maplibre-gl';
+import { holdsReach, nearTo, type Reach, reachOf, type View } from '../../map/view.ts';
 import type { Light } from '../../state/lights.ts';
 import type { Cells } from '../shared/cells.ts';
 import { tileFootprints } from './footprint-tiles.ts';
@@ -28,11 +28,22 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
   let laidOut: { sight: object; most: number; reach: Reach } | null = null;
   let mask: SeenMask | null = null;
   let water: Water | null = null;
+  let onMap: MapLibreMap | null = null;
+
+  /** Until it is known what was seen, the map's plain background says nothing. */
+  function coverBackground(): void {
+    if (sight) onMap?.setLayoutProperty(BACKGROUND_LAYER, 'visibility', 'none');
+  }
 
   function layOut(now: View): void {
     if (!sight || !mask) return;
     const most = mostPerTile(now.zoom);
-    if (laidOut?.sight === sight && laidOut.most === most && holdsReach(laidOut.reach, reachOf(now))) return;
+    if (
+      laidOut?.sight === sight &&
+      laidOut.most === most &&
+      holdsReach(laidOut.reach, reachOf(nearTo(laidOut.reach, now)))
+    )
+      return;
     laidOut = { sight, most, reach: reachOf(now, GROWN_PX) };
     mask.fill(tileFootprints(sight.cells, sight.kinds, most, laidOut.reach));
   }
@@ -43,12 +54,14 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
     renderingMode: '2d',
     setSight(cells, kinds) {
       sight = { cells, kinds };
+      coverBackground();
     },
     setLight(next) {
       light = next;
     },
     onAdd(map, gl) {
-      map.setLayoutProperty(BACKGROUND_LAYER, 'visibility', 'none');
+      onMap = map;
+      coverBackground();
       mask = createSeenMask(gl);
       water = createWater(gl);
       laidOut = null;
@@ -58,14 +71,15 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
       water?.remove();
       mask = null;
       water = null;
+      onMap = null;
     },
     prerender() {
       const now = view();
       layOut(now);
-      mask?.draw(now);
+      if (laidOut) mask?.draw(nearTo(laidOut.reach, now));
     },
     render() {
-      if (mask) water?.draw(view(), light, mask.texture);
+      if (mask && laidOut) water?.draw(view(), light, mask.texture);
     },
   };
 }

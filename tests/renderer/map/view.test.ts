@@ -1,6 +1,15 @@
 import { expect, test } from 'vitest';
 import { latOfMercator, lonOfMercator, mercatorX, mercatorY } from '../../../renderer/map/mercator.ts';
-import { boxOf, copiesIn, holdsReach, reachOf, toMercator, toScreen, type View } from '../../../renderer/map/view.ts';
+import {
+  boxOf,
+  copiesTouching,
+  holdsReach,
+  nearTo,
+  reachOf,
+  toMercator,
+  toScreen,
+  type View,
+} from '../../../renderer/map/view.ts';
 
 function viewAt(lon: number, lat: number, zoom: number, bearing = 0): View {
   return { x: mercatorX(lon), y: mercatorY(lat), zoom, bearing, widthPx: 1000, heightPx: 600 };
@@ -71,21 +80,18 @@ test('boxes a turned view by its corners', () => {
   expect(turned.north).toBeGreaterThan(upright.north);
 });
 
-test('draws the neighbouring world as soon as the view comes near its edge', () => {
-  expect(copiesIn(viewAt(0, 0, 5))).toEqual([0]);
-  expect(copiesIn(viewAt(179, 0, 5))).toEqual([0, 1]);
-  expect(copiesIn(viewAt(-179, 0, 5))).toEqual([-1, 0]);
-  expect(copiesIn(viewAt(0, 0, 0.5))).toEqual([-1, 0, 1]);
-});
-
-test('lets what is laid out a world wide serve wherever the view stands east and west', () => {
-  const outer = { west: -0.1, east: 1, north: 0, south: 1 };
-  expect(holdsReach(outer, reachOf(viewAt(175, 0, 3)))).toBe(true);
-  expect(holdsReach({ ...outer, east: 0.7 }, reachOf(viewAt(175, 0, 3)))).toBe(false);
+test('finds the copies of the world in which a place is in reach', () => {
+  const copiesOf = (view: View, lon: number) => {
+    const { first, last } = copiesTouching(reachOf(view), mercatorX(lon), mercatorX(lon));
+    return Array.from({ length: last - first + 1 }, (_, i) => first + i);
+  };
+  const acrossDateLine = viewAt(179, 0, 5);
+  expect([178, -178, 0].map((lon) => copiesOf(acrossDateLine, lon))).toEqual([[0], [1], []]);
+  expect(copiesOf(viewAt(0, 0, 0.5), 170)).toEqual([-1, 0]);
 });
 
 test('finds a box held on the other side of the date line', () => {
   const outer = reachOf(viewAt(179, 0, 5), 200);
-  expect(holdsReach(outer, reachOf(viewAt(-179, 0, 5)))).toBe(true);
-  expect(holdsReach(outer, reachOf(viewAt(-150, 0, 5)))).toBe(false);
+  expect(holdsReach(outer, reachOf(nearTo(outer, viewAt(-179, 0, 5))))).toBe(true);
+  expect(holdsReach(outer, reachOf(nearTo(outer, viewAt(-150, 0, 5))))).toBe(false);
 });

@@ -6,9 +6,11 @@ import { type DrawnCell, drawBlock } from '../drawn-block.ts';
 
 const KNOT_MS = 1852 / 3600;
 
+const oneWorld = { west: 0, east: 1, north: 0, south: 1 };
+
 function list(cells: DrawnCell[], hidden: number[] = []): DrawingList {
   const drawn = cells.map((_, i) => i).filter((i) => !hidden.includes(i));
-  return listDrawing(joinBlocks([drawBlock(cells)]), drawn, hidden);
+  return listDrawing(joinBlocks([drawBlock(cells)]), drawn, hidden, oneWorld);
 }
 
 /** East and north of the direction that an entry says its wind comes from. */
@@ -89,4 +91,12 @@ test('draws a hidden wind as a dot beneath all others, in the ink of its class',
 test('draws stronger barbs after weaker ones, so that the strongest lies on top', () => {
   const { runs } = list([30, 5, 12].map((speedMs, i) => ({ lon: i, lat: 50, speedMs })));
   expect(runs.map(({ shape }) => shape)).toEqual([{ fives: 2 }, { fives: 5 }, { fives: 12 }]);
+});
+
+test('lays a wind out once in every copy of the world in reach', () => {
+  const cells = joinBlocks([drawBlock([{ lon: 170, lat: 0, speedMs: 10 }])]);
+  const { runs, words } = listDrawing(cells, [0], [], { west: -0.3, east: 1.2, north: 0, south: 1 });
+  expect(runs).toEqual([{ shape: { fives: 4 }, first: 0, count: 2 }]);
+  const floats = new Float32Array(words.buffer);
+  expect([floats[0], floats[4]]).toEqual([expect.closeTo(170 / 360 - 0.5, 6), expect.closeTo(170 / 360 + 0.5, 6)]);
 });

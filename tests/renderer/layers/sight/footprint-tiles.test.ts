@@ -5,7 +5,7 @@ import { tileFootprints } from '../../../../renderer/layers/sight/footprint-tile
 import { lonOfMercator } from '../../../../renderer/map/mercator.ts';
 import { drawBlock } from '../drawn-block.ts';
 
-const everywhere = { west: 0, east: 1, north: -0.5, south: 1.5 };
+const everywhere = { west: 0.01, east: 1.005, north: -0.5, south: 1.5 };
 const kindOf: Record<string, number> = { '.': NOT_SHOWN, o: SHOWN_WITHOUT_WIND, h: WIND_HIDDEN, w: WIND_SHOWN };
 
 /** A lattice on the equator, cells of a quarter of a degree, drawn as letters: w wind, h hidden, o no wind, . not shown, ' ' a gap. */
