@@ -137,9 +137,11 @@ export function createChart(container: HTMLElement, options: ChartOptions): Char
 
   let toldMs = 0;
   map.on('style.load', () => {
-    map.addLayer(sight, LOWEST_LAND_LAYER);
-    areas.add();
+    // Also after a lost graphics context, which takes our layers with it. Barbs first: seen water without its winds would
+    // be taken for calm.
     map.addLayer(barbs);
+    areas.add(barbs.id);
+    map.addLayer(sight, LOWEST_LAND_LAYER);
   });
   map.on('move', () => {
     words.follow(view());

@@ -5,7 +5,7 @@ import workerUrl from 'maplibre-gl/dist/maplibre-gl-worker.mjs?url';
 import type { Light } from '../state/lights.ts';
 import { graticuleStep, linesIn } from './graticule.ts';
 import { type CoastScale, keepLand } from './land.ts';
-import { basePaint, mapStyle } from './map-style.ts';
+import { baseColours, mapStyle } from './map-style.ts';
 import { drawMargin } from './margin.ts';
 import { mercatorX, mercatorY } from './mercator.ts';
 import { type View, worldPx } from './view.ts';
@@ -29,12 +29,12 @@ const CLOSEST_ZOOM = 11;
 
 /**
  * The offline base map in a container: land, coast, graticule, and in the margin the names of its lines and a scale bar.
- * Seen straight down in Web Mercator; it may be turned, never tilted. Asks only for `coastlineUrl`; `failed` hears when
- * that cannot be read.
+ * Seen straight down in Web Mercator; it may be turned, never tilted. Asks only for `coastlineUrl`; `failed` hears what
+ * could not be read or drawn.
  */
 export function createBaseMap(
   container: HTMLElement,
-  light: Light,
+  firstLight: Light,
   camera: Camera,
   coastlineUrl: (scale: CoastScale) => string,
   failed: (reason: unknown) => void,
@@ -46,7 +46,7 @@ export function createBaseMap(
   container.append(canvasPlace);
   const map = new MapLibreMap({
     container: canvasPlace,
-    style: mapStyle(light),
+    style: mapStyle(firstLight),
     center: [camera.lon, camera.lat],
     zoom: camera.zoom,
     bearing: camera.bearing,
@@ -64,21 +64,24 @@ export function createBaseMap(
   const view = () => viewOf(map);
   const drawGraticule = keepGraticule(map);
   let stopLand = () => {};
+  let isStyled = false;
+  let light = firstLight;
 
-  function setLight(light: Light): void {
-    for (const [layer, property, value] of basePaint(light)) {
-      map.setPaintProperty(layer, property as 'line-color', value as string);
-    }
+  function paint(): void {
+    if (!isStyled) return;
+    for (const { layer, property, colour } of baseColours(light)) map.setPaintProperty(layer, property, colour);
   }
 
-  map.on('load', () => {
-    setLight(light);
+  map.once('style.load', () => {
+    isStyled = true;
+    paint();
     stopLand = keepLand(map, coastlineUrl, failed);
     drawGraticule(view());
   });
+  map.on('error', ({ error }) => failed(error));
   map.on('move', () => {
     margin.draw(view());
-    if (map.isStyleLoaded()) drawGraticule(view());
+    if (isStyled) drawGraticule(view());
   });
   map.on('resize', () => margin.draw(view()));
   margin.draw(view());
@@ -86,7 +89,10 @@ export function createBaseMap(
   return {
     map,
     view,
-    setLight,
+    setLight(next) {
+      light = next;
+      paint();
+    },
     remove() {
       stopLand();
       map.remove();

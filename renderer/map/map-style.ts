@@ -12,30 +12,32 @@ export const LOWEST_LAND_LAYER = landLayers[0];
 export function mapStyle(light: Light): StyleSpecification {
   const sources: StyleSpecification['sources'] = { graticule: emptySource() };
   for (const scale of coastScales) sources[`land-${scale}`] = { ...emptySource(), maxzoom: 9 };
-  return {
-    version: 8,
-    sources,
-    layers: [
-      { id: 'water', type: 'background', paint: { 'background-color': light.unseen } },
-      ...coastScales.map(landLayer),
-      ...coastScales.map(coastLayer),
-      { id: 'graticule', type: 'line', source: 'graticule', paint: { 'line-width': 1 } },
-    ],
-  };
+  const layers: LayerSpecification[] = [
+    { id: 'water', type: 'background' },
+    ...coastScales.map(landLayer),
+    ...coastScales.map(coastLayer),
+    { id: 'graticule', type: 'line', source: 'graticule', paint: { 'line-width': 1, 'line-opacity': 0.13 } },
+  ];
+  for (const { layer, property, colour } of baseColours(light)) {
+    const styled = layers.find(({ id }) => id === layer);
+    if (styled) styled.paint = { ...styled.paint, [property]: colour };
+  }
+  return { version: 8, sources, layers };
 }
 
-/** The paint of the base map in a light: layer, property and value. */
-export function basePaint(light: Light): [layer: string, property: string, value: unknown][] {
+/** The colours of the base map in a light. */
+export function baseColours(light: Light): { layer: string; property: BaseColour; colour: string }[] {
   return [
-    ['water', 'background-color', light.unseen],
-    ['graticule', 'line-color', light.ink],
-    ['graticule', 'line-opacity', 0.13],
-    ...coastScales.flatMap((scale): [string, string, unknown][] => [
-      [`land-${scale}`, 'fill-color', light.land],
-      [`coast-${scale}`, 'line-color', light.coast],
+    { layer: 'water', property: 'background-color', colour: light.unseen },
+    { layer: 'graticule', property: 'line-color', colour: light.ink },
+    ...coastScales.flatMap((scale) => [
+      { layer: `land-${scale}`, property: 'fill-color' as const, colour: light.land },
+      { layer: `coast-${scale}`, property: 'line-color' as const, colour: light.coast },
     ]),
   ];
 }
+
+type BaseColour = 'background-color' | 'fill-color' | 'line-color';
 
 function landLayer(scale: CoastScale): LayerSpecification {
   return {

@@ -5,8 +5,8 @@ import { type Position, unwrapRing } from './rings.ts';
 
 /** The kept watch area and the one being drawn, as dashed lines: solid and dotted outlines say how a danger ends. */
 export interface AreaOutline {
-  /** Puts source and layers on the map; again after its style was made anew. */
-  add(): void;
+  /** Puts source and layers on the map below another layer, where they are not there yet. */
+  add(below: string): void;
   setKept(area: { ring: readonly Position[]; name: string } | null): void;
   /** Positions drawn so far, the last one still moving; null ends it. */
   setDrawn(positions: readonly Position[] | null): void;
@@ -31,15 +31,13 @@ export function createAreaOutline(map: MapLibreMap, firstLight: Light): AreaOutl
   }
 
   return {
-    add() {
+    add(below) {
+      if (map.getSource(SOURCE)) return;
       map.addSource(SOURCE, { type: 'geojson', data: { type: 'MultiLineString', coordinates: [] } });
-      map.addLayer({ id: 'area-halo', type: 'line', source: SOURCE, paint: { 'line-width': 5, 'line-opacity': 0.7 } });
-      map.addLayer({
-        id: 'area-line',
-        type: 'line',
-        source: SOURCE,
-        paint: { 'line-width': 1.75, 'line-dasharray': [7, 3] },
-      });
+      const halo = { 'line-width': 5, 'line-opacity': 0.7 };
+      const line = { 'line-width': 1.75, 'line-dasharray': [7, 3] };
+      map.addLayer({ id: 'area-halo', type: 'line', source: SOURCE, paint: halo }, below);
+      map.addLayer({ id: 'area-line', type: 'line', source: SOURCE, paint: line }, below);
       this.setLight(light);
       draw();
     },
