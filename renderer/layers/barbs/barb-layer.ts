@@ -1,6 +1,7 @@
 import type { CustomLayerInterface } from 'maplibre-gl';
 import { nearTo, reachOf, type View } from '../../map/view.ts';
 import { inkWeightsPx, type Light } from '../../state/lights.ts';
+import { barbSizeAt } from '../shared/barb-size.ts';
 import { setCamera, withCamera } from '../shared/camera.ts';
 import { isInReach } from '../shared/cells.ts';
 import { createQuadIndices } from '../shared/quad-indices.ts';
@@ -91,8 +92,8 @@ function createDrawing(gl: WebGL2RenderingContext): Drawing {
     gl.useProgram(program.program);
     setCamera(gl, program, view);
     gl.uniform1f(program.at('u_devicePx'), 1 / devicePixelRatio);
-    gl.uniform1f(program.at('u_size'), sizeAt(view.zoom));
-    gl.uniform1f(program.at('u_reach'), MARK_REACH_PX * sizeAt(view.zoom));
+    gl.uniform1f(program.at('u_size'), barbSizeAt(view.zoom));
+    gl.uniform1f(program.at('u_reach'), MARK_REACH_PX * barbSizeAt(view.zoom));
     gl.uniform1fv(program.at('u_weight'), inkWeightsPx);
     gl.uniform3fv(program.at('u_ink'), inks);
     gl.uniform1i(program.at('u_winds'), 0);
@@ -142,9 +143,4 @@ function createDrawing(gl: WebGL2RenderingContext): Drawing {
       texture.remove();
     },
   };
-}
-
-/** Barbs grow a little once cells stand far apart: 1 up to zoom 6, 1.35 from zoom 8. */
-function sizeAt(zoom: number): number {
-  return 1 + 0.35 * Math.max(0, Math.min(1, (zoom - 6) / 2));
 }

@@ -1,3 +1,5 @@
+import { SHAFT_PX } from '../shared/barb-size.ts';
+
 /**
  * A barb in CSS pixels about its position: x across the shaft, positive towards the side that carries the feathers;
  * y along the shaft, from the position (0) out to where the wind comes from.
@@ -19,7 +21,6 @@ export interface Stroke {
 
 export const PENNANT_BASE_PX = 6;
 
-const SHAFT_PX = 22;
 const FEATHER_PX = 9.5;
 /** Feathers lean out from the shaft's end: degrees from square. */
 const LEAN_DEG = 22;

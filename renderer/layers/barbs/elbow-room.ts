@@ -1,4 +1,6 @@
-/** A barb as it would lie on the screen at some zoom: position, unit vector up its shaft, and side of its feathers. */
+import { SHAFT_PX } from '../shared/barb-size.ts';
+
+/** A barb of plain size as it would lie on the screen at some zoom: position, unit vector up its shaft, and side of its feathers. */
 export interface Footing {
   xPx: number;
   yPx: number;
@@ -10,9 +12,9 @@ export interface Footing {
 }
 
 /** The room a barb takes about its position: along its shaft, and across it towards its feathers and away from them. */
-const SHAFT_PX = 23;
 const FEATHERED_SIDE_PX = 10.5;
 const BARE_SIDE_PX = 3.5;
+const PAST_END_PX = 4.5;
 /** The room a mark without a shaft takes on every side. */
 const MARK_PX = 6;
 
@@ -75,5 +77,5 @@ function isInRoom(barb: Footing, right: number, down: number): boolean {
   if (barb.upX === 0 && barb.upY === 0) return Math.hypot(right, down) < MARK_PX;
   const along = right * barb.upX + down * barb.upY;
   const across = (down * barb.upX - right * barb.upY) * barb.side;
-  return along > -MARK_PX && along < SHAFT_PX + BARE_SIDE_PX && across > -BARE_SIDE_PX && across < FEATHERED_SIDE_PX;
+  return along > -MARK_PX && along < SHAFT_PX + PAST_END_PX && across > -BARE_SIDE_PX && across < FEATHERED_SIDE_PX;
 }

@@ -1,4 +1,6 @@
+import { toWholeKnots } from '../../../src/wind/units.ts';
 import { holdsReach, nearTo, type Reach, reachOf, type View, worldPx } from '../../map/view.ts';
+import { barbSizeAt } from '../shared/barb-size.ts';
 import { type Cells, directionOf, isInReach, isSouth } from '../shared/cells.ts';
 import { levelFor, NO_LEVEL } from './bins.ts';
 import { type DrawingList, listDrawing } from './drawing-list.ts';
@@ -26,7 +28,7 @@ export interface Layout {
 interface Scale {
   /** The level whose bins are used (bins). */
   level: number;
-  /** The width of the world at which barbs are kept off each other; 0 where every wind is drawn. */
+  /** The width of the world, in pixels of a barb of plain size, at which barbs are kept off each other; 0 where every wind is drawn. */
   worldPx: number;
 }
 
@@ -63,9 +65,9 @@ export function isLaidOutFor(layout: Layout, winds: Winds, view: View, isThinned
 }
 
 function scaleFor(view: View, isThinned: boolean): Scale {
-  const px = worldPx({ zoom: Math.floor(view.zoom / ZOOM_STEP) * ZOOM_STEP });
-  const level = isThinned ? levelFor(px) : NO_LEVEL;
-  return { level, worldPx: level === NO_LEVEL ? 0 : px };
+  const zoom = Math.floor(view.zoom / ZOOM_STEP) * ZOOM_STEP;
+  const level = isThinned ? levelFor(worldPx({ zoom })) : NO_LEVEL;
+  return { level, worldPx: level === NO_LEVEL ? 0 : worldPx({ zoom }) / barbSizeAt(zoom) };
 }
 
 function drawnAt(cells: Cells, winds: ThinnedWinds, level: number, reach: Reach): number[] {
@@ -87,7 +89,7 @@ function keepClear(cells: Cells, drawn: number[], scalePx: number): number[] {
 
 function footingOf(cells: Cells, cell: number, scalePx: number): Footing {
   const from = (directionOf(cells, cell) * Math.PI) / 180;
-  const hasShaft = !Number.isNaN(from);
+  const hasShaft = !Number.isNaN(from) && toWholeKnots(cells.speedMs[cell]) > 0;
   return {
     xPx: cells.x[cell] * scalePx,
     yPx: cells.y[cell] * scalePx,

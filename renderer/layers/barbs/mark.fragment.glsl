@@ -31,7 +31,7 @@ float outsideOf(vec2 p) {
   if (u_mark == HIDDEN) return length(p) - 1.3;
   if (u_mark == LAND) return abs(max(q.x, q.y) - 3.5) - 0.5 * DOUBT_WEIGHT;
   if (u_mark == QUALITY) return fromSegment(q, vec2(0.0), vec2(3.2)) - 0.5 * DOUBT_WEIGHT;
-  if (u_mark == RAIN) return abs(length(p) - 4.6) - 0.5 * DOUBT_WEIGHT;
+  if (u_mark == RAIN) return abs(length(p) - 5.2) - 0.5 * DOUBT_WEIGHT;
   if (u_mark == ICE) {
     float slope = fromSegment(vec2(q.x, p.y), vec2(0.0, 6.0), vec2(5.4, -3.4));
     float base = fromSegment(vec2(q.x, p.y), vec2(0.0, -3.4), vec2(5.4, -3.4));

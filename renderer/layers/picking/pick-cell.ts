@@ -1,12 +1,12 @@
 import { EARTH_RADIUS_KM, longitudeDifference } from '../../../src/geometry/sphere.ts';
 import { latOfMercator, lonOfMercator } from '../../map/mercator.ts';
 import { toMercator, toScreen, type View } from '../../map/view.ts';
+import { barbSizeAt, SHAFT_PX } from '../shared/barb-size.ts';
 import { type Cells, directionOf } from '../shared/cells.ts';
 import { NOT_SHOWN, SHOWN_WITHOUT_WIND } from '../shared/shown.ts';
 
-/** How far from a drawn barb's shaft a point may lie to mean it, CSS pixels, and how long a shaft is taken to be. */
+/** How far from a drawn barb's shaft a point may lie to mean it, CSS pixels. */
 const NEAR_PX = 9;
-const SHAFT_PX = 22;
 
 /**
  * The cell meant by a point of the screen: the drawn wind whose shaft lies nearest, within reach; else the shown cell
@@ -29,12 +29,13 @@ function nearestDrawn(
   point: { xPx: number; yPx: number },
 ): number | null {
   const [pointX] = toMercator(view, point.xPx, point.yPx);
+  const shaftPx = SHAFT_PX * barbSizeAt(view.zoom);
   let nearest: number | null = null;
   let nearestPx = NEAR_PX;
   for (const cell of drawn) {
     const x = cells.x[cell] + Math.round(pointX - cells.x[cell]);
     const [xPx, yPx] = toScreen(view, x, cells.y[cell]);
-    const px = fromShaftPx(point.xPx - xPx, point.yPx - yPx, directionOf(cells, cell) - view.bearing);
+    const px = fromShaftPx(point.xPx - xPx, point.yPx - yPx, directionOf(cells, cell) - view.bearing, shaftPx);
     if (px >= nearestPx) continue;
     nearest = cell;
     nearestPx = px;
@@ -43,11 +44,11 @@ function nearestDrawn(
 }
 
 /** Distance of a point, given from the foot of a shaft, to the shaft; to the foot alone where the direction is not known. */
-function fromShaftPx(rightPx: number, downPx: number, screenDirection: number): number {
+function fromShaftPx(rightPx: number, downPx: number, screenDirection: number, shaftPx: number): number {
   if (Number.isNaN(screenDirection)) return Math.hypot(rightPx, downPx);
   const upX = Math.sin((screenDirection * Math.PI) / 180);
   const upY = -Math.cos((screenDirection * Math.PI) / 180);
-  const along = Math.max(0, Math.min(SHAFT_PX, rightPx * upX + downPx * upY));
+  const along = Math.max(0, Math.min(shaftPx, rightPx * upX + downPx * upY));
   return Math.hypot(rightPx - along * upX, downPx - along * upY);
 }
 
