@@ -3,7 +3,7 @@ import { holdsReach, nearTo, type Reach, reachOf, type View } from '../../map/vi
 import type { Light } from '../../state/lights.ts';
 import type { Cells } from '../shared/cells.ts';
 import { tileFootprints } from './footprint-tiles.ts';
-import { createSeenMask, type SeenMask } from './seen-mask.ts';
+import { createSeenMask, MASK_MARGIN_PX, type SeenMask } from './seen-mask.ts';
 import { createWater, type Water } from './water.ts';
 
 export interface SightLayer extends CustomLayerInterface {
@@ -38,12 +38,10 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
   function layOut(now: View): void {
     if (!sight || !mask) return;
     const most = mostPerTile(now.zoom);
-    if (
-      laidOut?.sight === sight &&
-      laidOut.most === most &&
-      holdsReach(laidOut.reach, reachOf(nearTo(laidOut.reach, now)))
-    )
-      return;
+    if (laidOut?.sight === sight && laidOut.most === most) {
+      const needed = reachOf(nearTo(laidOut.reach, now), MASK_MARGIN_PX);
+      if (holdsReach(laidOut.reach, needed)) return;
+    }
     laidOut = { sight, most, reach: reachOf(now, GROWN_PX) };
     mask.fill(tileFootprints(sight.cells, sight.kinds, most, laidOut.reach));
   }
@@ -79,7 +77,9 @@ export function createSightLayer(view: () => View, firstLight: Light): SightLaye
       if (laidOut) mask?.draw(nearTo(laidOut.reach, now));
     },
     render() {
-      if (mask && laidOut) water?.draw(view(), light, mask.texture);
+      if (!mask || !laidOut) return;
+      const now = view();
+      water?.draw(now, light, mask.texture, mask.shiftFor(nearTo(laidOut.reach, now)));
     },
   };
 }

@@ -7,6 +7,7 @@ const float EDGE_STRENGTH = 0.7;
 const float DOT_RADIUS = 0.85;
 
 uniform sampler2D u_seen;
+uniform vec2 u_shift;
 uniform vec3 u_sea;
 uniform vec3 u_unseen;
 uniform vec3 u_hatch;
@@ -35,7 +36,7 @@ float stippleCover() {
 
 void main() {
   // The mean of four texels: smooths the mask's steps for the price of one look.
-  vec2 mask = texture(u_seen, (gl_FragCoord.xy + 0.5) / vec2(textureSize(u_seen, 0))).rg;
+  vec2 mask = texture(u_seen, (gl_FragCoord.xy + u_shift + 0.5) / vec2(textureSize(u_seen, 0))).rg;
   float seen = mask.r;
   vec3 water = u_sea;
   if (mask.g > 0.0) water = mix(u_sea, u_hatch, mask.g * stippleCover());

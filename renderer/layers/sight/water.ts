@@ -6,7 +6,8 @@ import waterVertex from './water.vertex.glsl?raw';
 
 /** Draws the water of the whole view from a mask of what was seen. */
 export interface Water {
-  draw(view: View, light: Light, seen: WebGLTexture): void;
+  /** `shift` is what to add to a device pixel to find its texel in the mask. */
+  draw(view: View, light: Light, seen: WebGLTexture, shift: [right: number, up: number]): void;
   remove(): void;
 }
 
@@ -22,12 +23,13 @@ export function createWater(gl: WebGL2RenderingContext): Water {
   const program = linkProgram(gl, waterVertex, waterFragment);
   const noAttributes = gl.createVertexArray();
   return {
-    draw(view, light, seen) {
+    draw(view, light, seen, shift) {
       gl.useProgram(program.program);
       gl.bindVertexArray(noAttributes);
       gl.activeTexture(gl.TEXTURE0);
       gl.bindTexture(gl.TEXTURE_2D, seen);
       gl.uniform1i(program.at('u_seen'), 0);
+      gl.uniform2f(program.at('u_shift'), ...shift);
       gl.uniform3fv(program.at('u_sea'), parseColour(light.sea));
       gl.uniform3fv(program.at('u_unseen'), parseColour(light.unseen));
       gl.uniform3fv(program.at('u_hatch'), parseColour(light.hatch));
