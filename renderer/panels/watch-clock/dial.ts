@@ -65,12 +65,17 @@ export function createDial(actions: DialActions): { element: SVGSVGElement; show
     knob,
   );
 
-  drag(element, face, (age, lastAge) => {
-    const step = Math.round(shortWay(age - lastAge) / DRAG_STEP_MS) * DRAG_STEP_MS;
-    if (step !== 0) actions.setNow(Math.round((state.nowMs + step) / 60_000) * 60_000);
-    return lastAge + step;
+  drag(element, face, () => {
+    const startMs = state.nowMs;
+    let turnedMs = 0;
+    return (age, lastAge) => {
+      const step = Math.round(shortWay(age - lastAge) / DRAG_STEP_MS) * DRAG_STEP_MS;
+      turnedMs += step;
+      if (step !== 0) actions.setNow(Math.round((startMs + turnedMs) / 60_000) * 60_000);
+      return lastAge + step;
+    };
   });
-  drag(element, knob, (age) => {
+  drag(element, knob, () => (age) => {
     actions.setWindowHours(Math.max(0.25, Math.round((age / HOUR_MS) * 4) / 4));
     return age;
   });
@@ -142,15 +147,23 @@ function setValue(handle: SVGElement, value: number, text: string): void {
   handle.setAttribute('aria-valuetext', text);
 }
 
-/** Follows the pointer from a handle; `move` gets the age under it and the last one it kept, and returns the one to keep. */
-function drag(dial: SVGSVGElement, handle: SVGElement, move: (ageMs: number, lastAgeMs: number) => number): void {
+/** Gets the age under the pointer and the last one it kept; returns the one to keep. */
+type Move = (ageMs: number, lastAgeMs: number) => number;
+
+/**
+ * Follows the pointer from a handle; `begin` is called at each grip and gives what follows its moves. Ages are told about
+ * where the dial stood when it was gripped: the watch line above may grow meanwhile and push it down.
+ */
+function drag(dial: SVGSVGElement, handle: SVGElement, begin: () => Move): void {
+  let move: Move = (age) => age;
   let lastAge = 0;
-  const ageUnder = (event: PointerEvent) => {
-    const box = dial.getBoundingClientRect();
-    return ageOfPoint(event.clientX - (box.left + box.width / 2), event.clientY - (box.top + box.height / 2));
-  };
+  let middle = { x: 0, y: 0 };
+  const ageUnder = (event: PointerEvent) => ageOfPoint(event.clientX - middle.x, event.clientY - middle.y);
   handle.addEventListener('pointerdown', (event) => {
     handle.setPointerCapture(event.pointerId);
+    const box = dial.getBoundingClientRect();
+    middle = { x: box.left + box.width / 2, y: box.top + box.height / 2 };
+    move = begin();
     lastAge = ageUnder(event);
     event.preventDefault();
     handle.focus();
