@@ -30,3 +30,12 @@ test('always shows the cautions in short, and all of them at a press', async ({ 
   await page.keyboard.press('Escape');
   await expect(page.getByRole('dialog')).toBeHidden();
 });
+
+test('fits its window: only the column scrolls, never the page', async ({ page }) => {
+  await expect(page.locator('.pass')).toHaveCount(3);
+  const { page: pageHeight, window: windowHeight } = await page.evaluate(() => ({
+    page: document.documentElement.scrollHeight,
+    window: document.documentElement.clientHeight,
+  }));
+  expect(pageHeight).toBe(windowHeight);
+});
